@@ -1,0 +1,1 @@
+"""Blue light reaching the eyes: weights, reflected radiance, seconds a day."""

@@ -1,0 +1,1 @@
+"""Light from the lamp to the far side of an increment: beam, bands, initiators, paste, transport, edge."""

@@ -1,0 +1,1 @@
+"""Room light on an unset paste: the working window."""
