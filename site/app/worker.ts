@@ -1,11 +1,13 @@
 /** The engine's thread: starts Python, then answers each text with the bridge's text. */
 import { loadPyodide } from "pyodide";
+import { info } from "pyodide/pyodide-lock.json";
 import type { FromWorker, ToWorker } from "./messages";
 
 declare const PYODIDE_FOLDER: string; // both are written in by site/making/bundle.py
 declare const ENGINE_ZIP: string;
 
-const NO_PACKAGES = { info: { abi_version: "0", arch: "wasm32", platform: "none", python: "0", version: "0" }, packages: {} };
+/** All that Python needs is in the one zip, so the list of packages is empty; its head must name the exact build. */
+const NO_PACKAGES = JSON.stringify({ info, packages: {} });
 
 const say = (message: FromWorker) => self.postMessage(message);
 const besideThis = (name: string) => new URL(name, import.meta.url).href;
@@ -15,7 +17,7 @@ async function start(): Promise<(text: string) => string> {
   const python = await loadPyodide({
     indexURL: besideThis(PYODIDE_FOLDER),
     stdLibURL: besideThis(ENGINE_ZIP),
-    lockFileContents: JSON.stringify(NO_PACKAGES),
+    lockFileContents: NO_PACKAGES,
     packageBaseUrl: besideThis(PYODIDE_FOLDER),
   });
   say({ step: "engine" });
