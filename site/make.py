@@ -59,9 +59,7 @@ def _step(what: str) -> Iterator[None]:
 
 def main() -> int:
     parser = argparse.ArgumentParser(description="Builds the site.")
-    parser.add_argument(
-        "--out", type=Path, default=BUILT_SITE, help=f"where to (default {BUILT_SITE.relative_to(TOP)})"
-    )
+    parser.add_argument("--out", type=Path, default=BUILT_SITE, help="where to (default .build/site)")
     parser.add_argument("--as-is", action="store_true", help="use this Python and Node, install nothing")
     given = parser.parse_args()
     environment.enter(as_is=given.as_is)

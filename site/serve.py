@@ -48,9 +48,8 @@ def serve(port: int, *, open_it: bool) -> int:
         say(f"Port {port} cannot be used ({error.strerror}). Try another: --port {port + 1}")
         return 1
     with server:
-        say(
-            f"Farside is at {server.address}\nAfter its first visit the page works without a network. Ctrl-C ends this."
-        )
+        say(f"Farside is at {server.address}")
+        say("After its first visit the page works without a network. Ctrl-C ends this.")
         if open_it and not webbrowser.open(server.address):
             say("No browser could be opened from here; open that address yourself.")
         try:

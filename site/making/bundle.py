@@ -1,4 +1,4 @@
-"""Bundles the page's TypeScript: one script for the page, one for the engine's thread, and Python's core beside them."""
+"""Bundles the page's TypeScript into one script for the page and one for the engine's thread; copies Python's core."""
 
 import json
 import shutil

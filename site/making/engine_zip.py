@@ -29,16 +29,16 @@ from pyrsistent_as_rpds.pure import *
 
 # What the engine, its libraries and Pyodide's start never import: the network, other data formats, developers' tools.
 LEFT_OUT = frozenset(
-    "__hello__ __phello__ _aix_support _android_support _apple_support _pyio _pyrepl antigravity argparse bdb cProfile code cmd "
-    "compileall configparser ctypes curses dbm doctest email ensurepip filecmp fileinput ftplib getopt getpass gettext "
-    "hmac html http imaplib lib2to3 mailbox mimetypes modulefinder multiprocessing netrc nturl2path optparse pdb pickletools "
-    "plistlib poplib profile pstats pty py_compile pyclbr pydoc pydoc_data rlcompleter sched shelve smtplib "
-    "socketserver sqlite3 ssl stringprep symtable tabnanny tarfile this timeit tomllib trace tty turtle unittest venv "
-    "wave webbrowser wsgiref xml xmlrpc zipapp zoneinfo".split()
+    """
+    __hello__ __phello__ _aix_support _android_support _apple_support _pyio _pyrepl antigravity argparse bdb
+    cProfile code cmd compileall configparser ctypes curses dbm doctest email ensurepip filecmp fileinput ftplib
+    getopt getpass gettext hmac html http imaplib lib2to3 mailbox mimetypes modulefinder multiprocessing netrc
+    nturl2path optparse pdb pickletools plistlib poplib profile pstats pty py_compile pyclbr pydoc pydoc_data
+    rlcompleter sched shelve smtplib socketserver sqlite3 ssl stringprep symtable tabnanny tarfile this timeit
+    tomllib trace tty turtle unittest venv wave webbrowser wsgiref xml xmlrpc zipapp zoneinfo
+    """.split()
 )
-KEPT_ENCODINGS = frozenset(
-    "__init__ aliases ascii cp437 latin_1 utf_8 utf_8_sig utf_16 utf_16_le utf_16_be utf_32".split()
-)
+KEPT_ENCODINGS = frozenset("__init__ aliases ascii cp437 latin_1 utf_8 utf_8_sig utf_16 utf_16_le utf_16_be".split())
 
 _STAGE = BUILD / "engine" / "source"
 

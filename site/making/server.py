@@ -1,5 +1,6 @@
 """Serves a built site on this machine, with the headers that a host of the site should send."""
 
+import sys
 import threading
 from functools import partial
 from http.server import SimpleHTTPRequestHandler, ThreadingHTTPServer
@@ -59,6 +60,16 @@ class Handler(SimpleHTTPRequestHandler):
         """Says nothing: a page's hundred requests are no news."""
 
 
+class _Quiet(ThreadingHTTPServer):
+    """A browser that leaves a page in the middle of a file is no error."""
+
+    daemon_threads = True
+
+    def handle_error(self, request: object, client_address: object) -> None:
+        if not isinstance(sys.exception(), ConnectionError):
+            super().handle_error(request, client_address)  # type: ignore[arg-type]
+
+
 class Server:
     """A site served from its own thread, for use in a `with`.
 
@@ -71,8 +82,7 @@ class Server:
     """
 
     def __init__(self, folder: Path, port: int = 0) -> None:
-        self._server = ThreadingHTTPServer(("127.0.0.1", port), partial(Handler, directory=str(folder)))
-        self._server.daemon_threads = True
+        self._server = _Quiet(("127.0.0.1", port), partial(Handler, directory=str(folder)))
         self._thread = threading.Thread(target=self._server.serve_forever, daemon=True)
 
     @property
