@@ -2,10 +2,13 @@
 
 import math
 from dataclasses import dataclass
-from typing import Final
+from typing import Final, TypeAlias
 
 from farside.physics.light.initiators import Initiator, absorption_per_mm
 from farside.physics.light.transport import slab
+
+Parts: TypeAlias = tuple[tuple[Initiator, float], ...]
+"""Initiators of a paste with their concentrations. [mol/L]"""
 
 OWN_SLOPE_PER_NM: Final = 0.036
 """Fall of the paste's own absorption towards longer waves, as the rate of an exponential. [1/nm]
@@ -35,10 +38,10 @@ class Paste:
     reduced_scattering_per_mm: float
     at_nm: float
     refractive_index: float
-    parts: tuple[tuple[Initiator, float], ...]
+    parts: Parts
 
 
-def own_absorption(total_absorption_per_mm: float, at_nm: float, parts: tuple[tuple[Initiator, float], ...]) -> float:
+def own_absorption(total_absorption_per_mm: float, at_nm: float, parts: Parts) -> float:
     """What initiators leave of a paste's total absorption at a wavelength, per mm.
 
     Negative where they absorb more than the total: an error if the total was measured, for the caller to judge.
@@ -122,5 +125,5 @@ def absorption_from_transmittance(
     return (low + high) / 2.0
 
 
-def _of_initiators(parts: tuple[tuple[Initiator, float], ...], wavelength_nm: float) -> float:
+def _of_initiators(parts: Parts, wavelength_nm: float) -> float:
     return math.fsum(absorption_per_mm(initiator, amount, wavelength_nm) for initiator, amount in parts)
