@@ -72,7 +72,7 @@ def _files() -> Iterator[tuple[str, bytes]]:
     """Everything that goes in, by its name in the zip."""
     yield from _standard_library()
     for library in LIBRARIES:
-        yield from _library(library)
+        yield from library_files(library)
     yield "rpds.py", RPDS.encode()
     for path in sorted(ENGINE.rglob("*.py")):
         name = path.relative_to(ENGINE.parent)
@@ -91,7 +91,7 @@ def _standard_library() -> Iterator[tuple[str, bytes]]:
                 yield name, archive.read(name)
 
 
-def _library(name: str) -> Iterator[tuple[str, bytes]]:
+def library_files(name: str) -> Iterator[tuple[str, bytes]]:
     """The Python and data files of an installed library, without its tests and without what is compiled."""
     for file in importlib.metadata.distribution(name).files or ():
         inside = file.parts[0] != ".." and not file.parts[0].endswith(".dist-info")
