@@ -7,7 +7,8 @@ from typing import Final
 Path = tuple[str | int, ...]
 
 LINE_LENGTH: Final = 120
-VALUE_LENGTH: Final = 80
+VALUE_LENGTH: Final = 160
+PATH_LENGTH: Final = 120
 LIST_LENGTH: Final = 400
 MESSAGE_LENGTH: Final = 700
 SHOWN_PROBLEMS: Final = 5
@@ -28,7 +29,7 @@ class Place:
     text: str
 
     def __str__(self) -> str:
-        name = printable(self.file, VALUE_LENGTH * 2)
+        name = printable(self.file, VALUE_LENGTH)
         return f"{name}:{self.line}:{self.column}" if self.line else name
 
 
@@ -112,7 +113,7 @@ def path_text(path: Path) -> str:
     if not path:
         return "the file"
     parts = [f"[{part}]" if isinstance(part, int) else f".{printable(part, 40)}" for part in path]
-    return cut("".join(parts).removeprefix("."), VALUE_LENGTH)
+    return cut("".join(parts).removeprefix("."), PATH_LENGTH)
 
 
 def _seen(character: str) -> str:

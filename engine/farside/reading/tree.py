@@ -135,6 +135,9 @@ class Tree:
         if isinstance(key, (dict, list)):
             raise Fault("key-not-plain", *at, found=type_word(key), where=path_text(level.path))
         if not isinstance(key, str):
+            before = next(reversed(holds.values()), None)
+            if type(key) is int and type(before) is int:
+                raise Fault("decimal-comma", *at, written=f"{before}.{key}")
             raise Fault("key-not-text", *at, name=plain_word(key), found=type_word(key))
         path = (*level.path, key)
         if key in holds:
