@@ -3,7 +3,6 @@
 from operator import attrgetter
 
 import pytest
-
 from reference.checks import Check
 from reference.registry import CHECKS
 

@@ -41,7 +41,7 @@ def _slabs() -> Iterator[Check]:
             ("transmittance", 0.03, "relative"),
             ("reflectance", 0.01, "absolute"),
             ("diffuse_transmittance", 0.03, "relative"),
-            ("diffuse_reflectance", 0.015, "absolute"),
+            ("diffuse_reflectance", 0.01, "absolute"),
         )
         for what, band, band_is in bands:
             yield Check(
@@ -70,7 +70,7 @@ def _matched_fluence() -> Iterator[Check]:
             says=f"fluence over irradiance at {row['depth_mm']:g} mm in a slab of {row['thickness_mm']:g} mm, index 1",
             published=row["fluence"],
             unit="",
-            band=0.03,
+            band=0.02,
             computed=partial(_fluence, row["depth_mm"], row["thickness_mm"], *optics),
         )
 
@@ -91,7 +91,7 @@ def _stepped_fluence() -> Iterator[Check]:
             says=f"fluence over irradiance from {ends[0]:g} to {ends[1]:g} mm in {where}, index 1.5",
             published=row["fluence"],
             unit="",
-            band=0.03,
+            band=0.02,
             computed=partial(_mean_fluence, ends, thickness, *optics),
         )
 

@@ -1,4 +1,4 @@
-"""Makes fluence_matched.csv: fluence inside slabs without a step in index by PythonicDISORT, for the transport's checks.
+"""Makes fluence_matched.csv: fluence inside slabs without a step in index, by discrete ordinates.
 
 Run it by hand with PythonicDISORT 1.8:
 python tests/reference/data/fluence_matched_make.py > tests/reference/data/fluence_matched.csv

@@ -2,7 +2,8 @@
 
 Photons enter along the normal, scatter by Henyey-Greenstein, meet Fresnel's surfaces, and leave their weight where
 they are absorbed; fluence is what a bin absorbs over its absorption. A slab of 40 mm stands for a half-space.
-Run it by hand with NumPy: python tests/reference/data/fluence_stepped_make.py > tests/reference/data/fluence_stepped.csv
+Run it by hand with NumPy:
+python tests/reference/data/fluence_stepped_make.py > tests/reference/data/fluence_stepped.csv
 """
 
 import numpy as np

@@ -1,8 +1,8 @@
 """How much light a paste reflects, passes and holds: adding-doubling, with the fluence inside.
 
 Light is followed in six directions a half-range, split at the critical angle. Against a 16-point
-reference the transmittance of a slab in air is within 1 %, its reflectance within 0.005 and the
-fluence rate within 3 % over the reach of the model; four would leave 5 % in the transmittance.
+reference the transmittance of a slab in air is within 1 % and its reflectance within 0.003 over the
+reach of the model, and the fluence rate within 2 %; four directions would leave 5 % in the transmittance.
 """
 
 from collections.abc import Sequence
@@ -54,7 +54,7 @@ def slab(
     --------
     >>> made = slab(2.0, 0.2, 1.0)
     >>> round(made.reflectance, 3), round(made.transmittance, 3)
-    (0.185, 0.146)
+    (0.184, 0.145)
     """
     along = streams(refractive_index)
     made = layer(thickness_mm, delta_scaled(absorption_per_mm, reduced_scattering_per_mm, anisotropy), along)
@@ -94,7 +94,7 @@ def slab_fluence(
     Examples
     --------
     >>> [round(share, 2) for share in slab_fluence((0.0, 1.0, 2.0), 2.0, 0.2, 1.0)]
-    [2.4, 1.64, 0.99]
+    [2.41, 1.64, 0.99]
     """
     along = streams(refractive_index)
     medium = delta_scaled(absorption_per_mm, reduced_scattering_per_mm, anisotropy)
@@ -140,7 +140,7 @@ def half_space_fluence(
     --------
     >>> table = half_space_fluence(0.2, 1.0, step_mm=1.0, count=4)
     >>> [round(share, 2) for share in table]
-    [2.37, 1.58, 0.73, 0.33]
+    [2.38, 1.58, 0.74, 0.33]
     """
     along = streams(refractive_index)
     step = layer(step_mm, delta_scaled(absorption_per_mm, reduced_scattering_per_mm, anisotropy), along)
