@@ -71,7 +71,9 @@ class Tree:
             level.anchor.height = level.height + 1
 
     def plain(self, word: str, at: At, anchor: str | None = None) -> None:
-        """A scalar without quotes."""
+        """A scalar without quotes; an empty one has its key's place."""
+        if not word and self._levels and (key := self._levels[-1].key) is not None:
+            at = self.key_places[(*self._levels[-1].path, key)]
         try:
             value = resolved(word)
         except NotFinite:

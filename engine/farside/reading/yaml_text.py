@@ -1,8 +1,8 @@
 """Grows a tree from YAML, and turns a parser's complaint into one that a clinician can act on.
 
 PyYAML's events are read one by one, never composed by recursion, so that depth and aliases are bounded first.
-Its compiled parser is quicker and accepts more; whatever it refuses, and any file with tabs, the pure one judges,
-so that both give the same data, places and messages.
+Its compiled parser is quicker and takes a few things differently; whatever it refuses, and any text with one of
+those, the pure parser judges, so that both give the same data, places and messages.
 """
 
 import re
@@ -30,6 +30,7 @@ _BY_PROBLEM: Final = (
 )
 _COMMA: Final = re.compile(r"expected ',' or '([\]}])', but got (.*)", re.DOTALL)
 _NO_TOKEN: Final = re.compile(r"found character '(.*)' that cannot start any token", re.DOTALL)
+_TAKEN_DIFFERENTLY: Final = re.compile("[\\t?!]|[|>][-+0-9]*#")
 _OPENING: Final = {"]": "[", "}": "{"}
 
 
@@ -41,7 +42,7 @@ def grow_from_yaml(text: str) -> Tree:
     Fault
         For all that is not YAML or that a tree refuses.
     """
-    if _QUICK is not None and "\t" not in text:
+    if _QUICK is not None and not _TAKEN_DIFFERENTLY.search(text):
         try:
             return _grown(_QUICK(text))
         except (yaml.YAMLError, ValueError):
