@@ -1,0 +1,1 @@
+"""What a clinic writes down, as frozen records: plan, lamp, composite, adhesive, liner, usual values."""

@@ -1,0 +1,156 @@
+"""A plan document and the cards it names to one record, with what only the whole plan can refuse."""
+
+import math
+from collections.abc import Mapping
+from datetime import date
+from typing import Any, Final
+
+from farside.clinic.cards import Cards
+from farside.clinic.plan import Exposure, Increment, LayerUse, Plan, RoomSource
+from farside.clinic.reading import Path, checked, day, filled, refuse
+from farside.clinic.usual import with_usual
+from farside.reading.document import Document
+
+_NEEDED: Final = (
+    ("lamp", "card"),
+    ("lamp", "mode"),
+    ("lamp", "sleeve"),
+    ("cavity", "depth_mm"),
+    ("cavity", "width_mm"),
+    ("gap_mm",),
+)
+_NOT_USED: Final = "not-used"
+
+
+def read_plan(document: Document, cards: Cards, clinic: Document | None = None, on: date | None = None) -> Plan:
+    """A plan as a record.
+
+    Parameters
+    ----------
+    document : Document
+        The plan as written.
+    cards : Cards
+        The cards at hand.
+    clinic : Document, optional
+        The clinic's usual values.
+    on : date, optional
+        The day that the plan is for, before the plan's own; today where neither says.
+
+    Raises
+    ------
+    Refused
+        When the plan, merged with the usual values, lacks a needed value, names a card or mode that is not there, or
+        does not fit its own cavity.
+    """
+    checked(document)
+    if clinic is not None:
+        checked(clinic)
+    data = filled(with_usual(document, clinic), "plan")
+    _refuse_missing(document, data)
+    lamp = cards.lamp(data["lamp"]["card"], document, ("lamp", "card"))
+    mode = next((mode for mode in lamp.modes if mode.id == data["lamp"]["mode"]), None)
+    if mode is None:
+        known = ", ".join(mode.id for mode in lamp.modes)
+        refuse(document, "mode-unknown", ("lamp", "mode"), lamp=lamp.id, mode=data["lamp"]["mode"], known=known)
+    increments = tuple(
+        _increment(document, cards, entry, ("increments", index)) for index, entry in enumerate(data["increments"])
+    )
+    _refuse_unfit(document, data, increments)
+    room = data.get("room", {}).get("sources")
+    return Plan(
+        title=data["title"],
+        on=on or day(data.get("on")) or date.today(),
+        lamp=lamp,
+        mode=mode,
+        sleeve=data["lamp"]["sleeve"],
+        depth_mm=float(data["cavity"]["depth_mm"]),
+        width_mm=float(data["cavity"]["width_mm"]),
+        remaining_dentine_mm=_number(data["cavity"], "remaining_dentine_mm"),
+        gap_mm=float(data["gap_mm"]),
+        adhesive=_layer_use(document, cards, data, "adhesive"),
+        liner=_layer_use(document, cards, data, "liner"),
+        room=None
+        if room is None
+        else tuple(RoomSource(light["what"], float(light["illuminance_lx"]), light["filter"]) for light in room),
+        increments=increments,
+        after=_exposures(document, data.get("after", ()), ("after",)),
+        fields=data,
+    )
+
+
+def _refuse_missing(document: Document, data: Mapping[str, Any]) -> None:
+    for path in _NEEDED:
+        found: Any = data
+        for step in path:
+            found = found.get(step) if isinstance(found, Mapping) else None
+        if found is None:
+            refuse(document, "missing-after-usual", path, what=".".join(path))
+    for index, increment in enumerate(data["increments"]):
+        if "composite" not in increment:
+            what = f"increments[{index}].composite"
+            refuse(document, "missing-after-usual", ("increments", index, "composite"), what=what)
+
+
+def _refuse_unfit(document: Document, data: Mapping[str, Any], increments: tuple[Increment, ...]) -> None:
+    depth_mm = float(data["cavity"]["depth_mm"])
+    tip_mm = depth_mm + float(data["gap_mm"])
+    filled_mm = 0.0
+    for index, increment in enumerate(increments):
+        path: Path = ("increments", index, "thickness_mm")
+        if increment.thickness_mm > depth_mm:
+            refuse(
+                document,
+                "thicker-than-cavity",
+                path,
+                what=f"increments[{index}].thickness_mm",
+                thickness=f"{increment.thickness_mm:g}",
+                depth=f"{depth_mm:g}",
+            )
+        filled_mm += increment.thickness_mm
+        if filled_mm > tip_mm + 1e-9:
+            refuse(document, "fills-past-tip", path, filled=f"{filled_mm:g}", tip=f"{tip_mm:g}")
+
+
+def _increment(document: Document, cards: Cards, data: Mapping[str, Any], path: Path) -> Increment:
+    return Increment(
+        composite=cards.composite(data["composite"], document, (*path, "composite")),
+        thickness_mm=float(data["thickness_mm"]),
+        placing_s=_number(data, "placing_s"),
+        dispensed_s=_number(data, "dispensed_s"),
+        exposures=_exposures(document, data.get("exposures", ()), (*path, "exposures")),
+        fields=data,
+    )
+
+
+def _layer_use(document: Document, cards: Cards, data: Mapping[str, Any], kind: str) -> LayerUse | None:
+    use = data.get(kind)
+    if use is None or use == _NOT_USED:
+        return None
+    layer = cards.layer(kind, use["card"], document, (kind, "card"))
+    return LayerUse(layer, _exposures(document, use.get("exposures", ()), (kind, "exposures")))
+
+
+def _exposures(document: Document, entries: Any, path: Path) -> tuple[Exposure, ...]:
+    return tuple(_exposure(document, entry, (*path, index)) for index, entry in enumerate(entries))
+
+
+def _exposure(document: Document, data: Mapping[str, Any], path: Path) -> Exposure:
+    from_side = data["from"] == "side"
+    distance_mm = _number(data, "tip_distance_mm")
+    if from_side and distance_mm is None:
+        refuse(document, "side-distance", path)
+    shares = [layer.get("transmittance_share") for layer in data["through"]]
+    return Exposure(
+        time_s=float(data["time_s"]),
+        tilt_deg=float(data["tilt_deg"]),
+        aim_offset_mm=float(data["aim_offset_mm"]),
+        from_side=from_side,
+        tip_distance_mm=distance_mm,
+        through_share=None if None in shares else math.prod(shares),
+        rest_before_s=_number(data, "rest_before_s"),
+        fields=data,
+    )
+
+
+def _number(data: Mapping[str, Any], key: str) -> float | None:
+    return None if data.get(key) is None else float(data[key])

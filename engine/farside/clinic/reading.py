@@ -1,0 +1,80 @@
+"""What every reader of a clinic's files shares: kind, schema, defaults, dates, and refusal with a place."""
+
+from collections.abc import Mapping
+from datetime import date
+from typing import Any, Final, NoReturn
+
+from farside import shipped
+from farside.clinic.messages import MESSAGES
+from farside.reading.defaults import with_defaults
+from farside.reading.document import Document
+from farside.reading.problems import Refused
+from farside.reading.schema import check_schema, nearest
+
+KINDS: Final = ("plan", "lamp", "composite", "adhesive", "liner", "clinic", "rule", "protocol")
+
+Path = tuple[str | int, ...]
+
+
+def refuse(document: Document, key: str, path: Path, **values: object) -> NoReturn:
+    """Refuse a document, the reason placed.
+
+    Raises
+    ------
+    Refused
+        Always.
+    """
+    raise Refused((document.problem(MESSAGES, key, path, at_key=False, **values),))
+
+
+def kind_of(document: Document) -> str:
+    """The kind that a document says it is.
+
+    Raises
+    ------
+    Refused
+        When it says none, or one that is not read here.
+    """
+    kind = document.data.get("kind")
+    if kind not in KINDS:
+        found = "a file without a kind" if kind is None else f'"{kind}"'
+        refuse(document, "kind-unknown", ("kind",), found=found, kinds=", ".join(KINDS))
+    return str(kind)
+
+
+def checked(document: Document) -> Document:
+    """A document whose kind is known and which keeps to that kind's schema.
+
+    Raises
+    ------
+    Refused
+        With each problem at its place.
+    """
+    check_schema(document, shipped.schema(kind_of(document)), tuple(shipped.schemas().values()))
+    return document
+
+
+def filled(data: Mapping[str, Any], kind: str) -> dict[str, Any]:
+    """Data of a kind with that kind's defaults filled in."""
+    return dict(with_defaults(data, shipped.schema(kind), shipped.referred))
+
+
+def day(text: str | None) -> date | None:
+    """The date that a checked text names, None where there is none."""
+    return None if text is None else date.fromisoformat(text)
+
+
+def unknown_card(document: Document, path: Path, kind: str, wanted: str, known: list[str]) -> NoReturn:
+    """Refuse a document that names a card which is not at hand, with the nearest that is.
+
+    Raises
+    ------
+    Refused
+        Always.
+    """
+    near = nearest(wanted, known)
+    if not known:
+        refuse(document, "card-none", path, kind=kind, id=wanted)
+    if near is None:
+        refuse(document, "card-unknown", path, kind=kind, id=wanted, known=", ".join(sorted(known)))
+    refuse(document, "card-unknown-near", path, kind=kind, id=wanted, near=near)
