@@ -1,0 +1,83 @@
+"""A report as text for a terminal or a printer: worst first, measured against limit, what to do."""
+
+from collections.abc import Iterable, Iterator
+from datetime import date
+from textwrap import wrap
+from typing import Final
+
+from farside.export.messages import MARKS, text
+from farside.protocol.findings import Finding, Measured
+from farside.protocol.report import Report
+
+_WIDTH: Final = 100
+_INDENT: Final = 10
+_SHOWN_DIGITS: Final = 8
+# Said once a plan, however many increments they touch.
+_ONCE: Final = frozenset({"assumed-optics"})
+
+
+def as_text(report: Report) -> str:
+    """A report as text, ending in a line break."""
+    lines = [_head(report), "", f"{MARKS[report.verdict]} {report.verdict_says()}", ""]
+    for finding in _once(report.findings):
+        if finding.finding != "clear":
+            lines += [*_finding(finding), ""]
+    lines += [_labelled("clear", report.clear_says()), "", *wrap(text("caution"), _WIDTH)]
+    return "\n".join(lines) + "\n"
+
+
+def _head(report: Report) -> str:
+    plan, protocol = report.trace.plan, report.protocol
+    return text(
+        "head",
+        title=plan.title,
+        on=spoken_date(plan.on),
+        protocol=protocol.id,
+        edition=protocol.edition,
+        digest=protocol.digest[:_SHOWN_DIGITS],
+    )
+
+
+def spoken_date(day: date) -> str:
+    """A date as people say it: 30 November 2026."""
+    return f"{day.day} {day:%B %Y}"
+
+
+def measured_words(measured: Measured) -> str:
+    """What was measured against which limits, in one line."""
+    unit = f" {measured.unit}" if measured.unit else ""
+    limits = (
+        text(f"side-{a.side}", finding=text(f"grade-{a.finding}"), value=f"{a.shown}{unit}") for a in measured.against
+    )
+    return text("measured", label=measured.label, value=f"{measured.shown}{unit}", limits=", ".join(limits))
+
+
+def _finding(finding: Finding) -> Iterator[str]:
+    yield from _labelled(finding.finding, finding.says).splitlines()
+    if finding.measured is not None and finding.finding != "open":
+        yield from _indented(f"{measured_words(finding.measured)} · {finding.rule.id}")
+    else:
+        yield from _indented(finding.rule.id)
+    yield from _indented(finding.do)
+    if finding.rule.caution and finding.finding in {"stop", "revise"}:
+        yield from _indented(finding.rule.caution)
+
+
+def _labelled(grade: str, words: str) -> str:
+    head = f"{MARKS[grade]} {text(f'grade-{grade}')}".ljust(_INDENT)
+    return "\n".join(wrap(words, _WIDTH, initial_indent=head, subsequent_indent=" " * _INDENT))
+
+
+def _indented(words: str) -> Iterable[str]:
+    return wrap(words, _WIDTH, initial_indent=" " * _INDENT, subsequent_indent=" " * _INDENT)
+
+
+def _once(findings: Iterable[Finding]) -> Iterator[Finding]:
+    """Findings without the repeats of those that need saying once: of one rule, grade and composite."""
+    said: set[tuple[object, ...]] = set()
+    for finding in findings:
+        key = (finding.rule.id, finding.finding, finding.where["composite"])
+        if finding.rule.id in _ONCE and key in said:
+            continue
+        said.add(key)
+        yield finding
