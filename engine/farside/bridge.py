@@ -1,0 +1,106 @@
+"""All that the page may call: one request as JSON in, one answer as JSON out, never an exception."""
+
+import json
+from collections.abc import Callable, Mapping
+from datetime import date
+from typing import Any, Final
+
+import yaml
+
+from farside import shipped
+from farside.check import check
+from farside.clinic.reading import checked
+from farside.export.drawing import as_drawing
+from farside.protocol.protocol import base_protocol
+from farside.protocol.wording import said
+from farside.reading.document import Document, read_document
+from farside.reading.problems import Problem, Refused
+from farside.version import VERSION
+
+_CLINIC: Final = "example-clinic"
+
+
+def call(text: str) -> str:
+    """Answer one request.
+
+    Parameters
+    ----------
+    text : str
+        A JSON mapping whose `do` is `start`, `check`, `read` or `write`.
+
+    Returns
+    -------
+    str
+        A JSON mapping: `ok` true with the answer, or false with `problems`, each with its place and whole text, or
+        with `fault`, a defect of the engine itself.
+    """
+    try:
+        request = json.loads(text)
+        answer = _ANSWERS[request["do"]](request)
+    except Refused as refused:
+        answer = {"ok": False, "problems": [_problem(problem) for problem in refused.problems]}
+    except Exception as fault:  # the page must say what went wrong, whatever it was
+        answer = {"ok": False, "fault": f"{type(fault).__name__}: {fault}"}
+    return json.dumps(answer, ensure_ascii=False, allow_nan=False)
+
+
+def _start(_: Mapping[str, Any]) -> dict[str, Any]:
+    protocol = base_protocol()
+    plans = [(name.rpartition("/")[2].removesuffix(".yaml"), name) for name in shipped.names(f"{_CLINIC}/plans")]
+    folders = ("lamps", "composites", "adhesives", "liners")
+    cards = [name for folder in folders for name in shipped.names(f"{_CLINIC}/{folder}")]
+    return {
+        "ok": True,
+        "engine": VERSION,
+        "protocol": protocol.named(),
+        "rules": [
+            {"id": rule.id, "title": rule.title, "topic": rule.topic, "page": f"rules/{rule.id}/"}
+            for rule in protocol.rules
+        ],
+        "plans": [{"name": name, "data": shipped.document(path).data} for name, path in plans],
+        "cards": [shipped.document(name).data for name in cards],
+        "clinic": shipped.document(f"{_CLINIC}/clinic.yaml").data,
+        "caution": said("caution"),
+    }
+
+
+def _check(request: Mapping[str, Any]) -> dict[str, Any]:
+    on = request.get("on")
+    report = check(
+        Document.of(request["plan"], "plan"),
+        request.get("cards", ()),
+        clinic=request.get("clinic"),
+        on=None if on is None else date.fromisoformat(on),
+    )
+    return {"ok": True, "report": report.as_data(), "drawing": as_drawing(report)}
+
+
+def _read(request: Mapping[str, Any]) -> dict[str, Any]:
+    document = checked(read_document(request["text"], request["name"]))
+    return {"ok": True, "kind": document.data["kind"], "data": document.data}
+
+
+def _write(request: Mapping[str, Any]) -> dict[str, Any]:
+    text = yaml.safe_dump(request["data"], sort_keys=False, allow_unicode=True, width=100)
+    return {"ok": True, "text": text}
+
+
+def _problem(problem: Problem) -> dict[str, Any]:
+    place = problem.place
+    return {
+        "file": place.file,
+        "line": place.line,
+        "column": place.column,
+        "path": list(problem.path),
+        "message": problem.message,
+        "text": place.text,
+        "shown": str(problem),
+    }
+
+
+_ANSWERS: Final[Mapping[str, Callable[[Mapping[str, Any]], dict[str, Any]]]] = {
+    "start": _start,
+    "check": _check,
+    "read": _read,
+    "write": _write,
+}
