@@ -54,10 +54,8 @@ def measured_words(measured: Measured) -> str:
 
 def _finding(finding: Finding) -> Iterator[str]:
     yield from _labelled(finding.finding, finding.says).splitlines()
-    if finding.measured is not None and finding.finding != "open":
-        yield from _indented(f"{measured_words(finding.measured)} · {finding.rule.id}")
-    else:
-        yield from _indented(finding.rule.id)
+    measured = [measured_words(finding.measured)] if finding.measured and finding.finding != "open" else []
+    yield from _indented(" · ".join([*measured, finding.where_says, finding.rule.id]))
     yield from _indented(finding.do)
     if finding.rule.caution and finding.finding in {"stop", "revise"}:
         yield from _indented(finding.rule.caution)

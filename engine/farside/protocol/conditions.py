@@ -54,6 +54,10 @@ class Test:
         """Itself."""
         yield self
 
+    def live(self, _values: Values, _limits: Limits) -> Iterator["Test"]:
+        """Itself."""
+        yield self
+
     def unknowns(self, values: Values, limits: Limits) -> Iterator[str]:
         """The names whose absence leaves it unknown."""
         if self.judged(values, limits) is None:
@@ -80,6 +84,14 @@ class Group:
         for part in self.parts:
             yield from part.tests()
 
+    def live(self, values: Values, limits: Limits) -> Iterator[Test]:
+        """The tests that could still decide it: not those beside which something else already fails."""
+        outcomes = [part.judged(values, limits) for part in self.parts]
+        for index, part in enumerate(self.parts):
+            beside = outcomes[:index] + outcomes[index + 1 :]
+            if self.decides or False not in beside:
+                yield from part.live(values, limits)
+
     def unknowns(self, values: Values, limits: Limits) -> Iterator[str]:
         """The names whose absence leaves it unknown."""
         if self.judged(values, limits) is None:
@@ -101,6 +113,10 @@ class Not:
     def tests(self) -> Iterator[Test]:
         """The tests of its part."""
         yield from self.part.tests()
+
+    def live(self, values: Values, limits: Limits) -> Iterator[Test]:
+        """The tests of its part that could still decide it."""
+        yield from self.part.live(values, limits)
 
     def unknowns(self, values: Values, limits: Limits) -> Iterator[str]:
         """The names whose absence leaves it unknown."""

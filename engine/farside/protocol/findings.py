@@ -44,6 +44,7 @@ class Finding:
     rule: Rule
     finding: Grade
     where: Where
+    where_says: str
     values: Mapping[str, Any]
     missing: tuple[str, ...]
     says: str
@@ -59,6 +60,7 @@ class Finding:
             "finding": self.finding,
             "about": self.rule.about,
             "where": dict(self.where),
+            "where_says": self.where_says,
             "values": dict(self.values),
             "limits": self.rule.values_of_limits(),
             "measured": None if self.measured is None else _measured_data(self.measured),
@@ -77,13 +79,15 @@ def finding_of(rule: Rule, values: SubjectValues) -> Finding | None:
     outcome = judged(rule, values)
     if outcome is None:
         return None
+    where = values.subject.where()
     missing = tuple(dict.fromkeys(name for name in outcome.missing for name in _inputs(name, values)))
     says, do = _words(rule, outcome, missing, values)
     names = dict.fromkeys([*(test.name for test in rule.tests()), *placeholders(rule.says)])
     return Finding(
         rule=rule,
         finding=outcome.finding,
-        where=values.subject.where(),
+        where=where,
+        where_says=_where_words(rule, where, values),
         values={name: value for name in names if (value := values.get(name)) is not None},
         missing=missing,
         says=says,
@@ -107,6 +111,14 @@ def sorted_findings(findings: Iterable[Finding]) -> tuple[Finding, ...]:
         )
 
     return tuple(sorted(findings, key=place))
+
+
+def _where_words(rule: Rule, where: Where, values: SubjectValues) -> str:
+    if rule.about == "exposure":
+        return said(f"where-{where['layer']}", increment=where["increment"], exposure=where["exposure"])
+    if rule.about == "composite" and values.subject.composite is not None:
+        return said("where-composite", title=values.subject.composite.title)
+    return said(f"where-of-{rule.about}", increment=where["increment"], title=values.subject.trace.plan.lamp.title)
 
 
 def _inputs(name: str, values: SubjectValues) -> tuple[str, ...]:
@@ -150,7 +162,7 @@ def _measured(rule: Rule, outcome: Outcome, values: SubjectValues) -> Measured |
 
     Of the numbers that the level at hand tests it is the one with the most limits; where no level holds, any level's.
     """
-    against = _held_against(rule)
+    against = _held_against(rule, values)
     levels = rule.levels if outcome.level is None else (outcome.level,)
     tested = dict.fromkeys(test.name for level in levels for test in level.when.tests() if test.name in against)
     numbers = [name for name in tested if _is_number(values.get(name)) and values.quantity(name) is not None]
@@ -172,11 +184,11 @@ def _measured(rule: Rule, outcome: Outcome, values: SubjectValues) -> Measured |
     )
 
 
-def _held_against(rule: Rule) -> dict[str, dict[str, tuple[float, Grade, str]]]:
+def _held_against(rule: Rule, values: SubjectValues) -> dict[str, dict[str, tuple[float, Grade, str]]]:
     """By quantity, the limits that it is held against, each with its value, finding and side, worst first."""
     found: dict[str, dict[str, tuple[float, Grade, str]]] = {}
     for level in rule.levels:
-        for test in level.when.tests():
+        for test in level.when.live(values, rule.values_of_limits()):
             operand = test.operands[0]
             if test.how in _SIDES and operand.sort == "limit" and _is_number(rule.limits[operand.of].value):
                 entry = (float(rule.limits[operand.of].value), level.finding, test.how)
