@@ -16,7 +16,7 @@ _TOKEN: Final = re.compile(
 )
 _SPACE: Final = re.compile(r"[ \t\r\n]*")
 _LINE_END: Final = re.compile("\r\n|\r|\n")
-_YAML_WORD: Final = {"Infinity": ".inf", "-Infinity": "-.inf", "NaN": ".nan"}
+_OPEN_TEXT: Final = re.compile(r'"(?:[^"\\\x00-\x1f]|\\.)*\\?')
 _CLOSES: Final = {"{": "}", "[": "]"}
 
 
@@ -57,7 +57,7 @@ class _Reader:
             token = _TOKEN.match(text, index)
             at = self.at(index)
             if token is None:
-                raise NotJson(self.why(wanted, at))
+                raise NotJson(self.no_token(index, wanted, at))
             wanted = self.step(token, wanted, at)
             index = _space(text, token.end())
         if wanted != "end":
@@ -77,7 +77,9 @@ class _Reader:
                 self.tree.text(self.unescaped(word, at), at)
                 return self.after_value()
         elif wanted in {"value", "value or ]"}:
-            self.tree.plain(_YAML_WORD.get(word, word), at)
+            if token.lastgroup == "endless":
+                self.tree.refuse_number(word, at)
+            self.tree.plain(word, at)
             return self.after_value()
         raise NotJson(self.why(wanted, at))
 
@@ -117,6 +119,13 @@ class _Reader:
         if wanted == ":":
             return Fault("colon-missing", *at)
         return Fault("key-in-quotes" if wanted.startswith("key") else "value-expected", *at)
+
+    def no_token(self, index: int, wanted: str, at: At) -> Fault:
+        if self.text[index] != '"':
+            return self.why(wanted, at)
+        opened = _OPEN_TEXT.match(self.text, index)
+        ends = opened is None or opened.end() == len(self.text)
+        return Fault("quote-not-closed" if ends else "quote-over-lines", *at)
 
     def cut_off(self, at: At) -> Fault:
         if not self.opened:

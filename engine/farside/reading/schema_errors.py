@@ -2,16 +2,18 @@
 
 import re
 from collections.abc import Iterable, Iterator, Mapping
+from itertools import islice
 from typing import Any, Final
 
 from .document import Document
 from .messages import MESSAGES
 from .nearest import nearest
 from .problems import Path, Problem, path_text
-from .schema_words import choices_word, looks_like_number, range_word, shown_value, wanted_word
+from .schema_words import ANSWERS, choices_word, looks_like_number, range_word, shown_value, wanted_word
 from .tree import type_word
 
 RANGE: Final = frozenset({"minimum", "maximum", "exclusiveMinimum", "exclusiveMaximum"})
+MOST_KEYS: Final = 50
 CHOICES: Final = frozenset({"oneOf", "anyOf"})
 
 
@@ -97,7 +99,12 @@ def _wrong_type(document: Document, value: object, wanted: str | list[str], path
     if isinstance(value, str) and kinds & {"number", "integer"} and (number := looks_like_number(value)):
         key = f"type-{number.why}"
         return document.problem(MESSAGES, key, path, wanted=word, value=value, number=number.written)
-    return document.problem(MESSAGES, "type", path, found=type_word(value), wanted=word)
+    if isinstance(value, str) and kinds == {"boolean"} and (written := ANSWERS.get(value.lower())):
+        return document.problem(MESSAGES, "type-answer", path, wanted=word, written=written)
+    if kinds == {"string"} and isinstance(value, (bool, int, float)):
+        return document.problem(MESSAGES, "type-text", path, found=type_word(value))
+    found = shown_value(value) if kinds == {"integer"} and isinstance(value, float) else type_word(value)
+    return document.problem(MESSAGES, "type", path, found=found, wanted=word)
 
 
 def _wrong_choice(document: Document, value: object, choices: list[Any], path: Path) -> Problem:
@@ -114,9 +121,8 @@ def _unknown_keys(document: Document, error: Any, path: Path) -> Iterator[Proble
     schema = error.schema
     known: Mapping[str, Any] = schema.get("properties", {})
     patterns = [re.compile(pattern) for pattern in schema.get("patternProperties", {})]
-    for name in error.instance:
-        if name in known or any(pattern.search(name) for pattern in patterns):
-            continue
+    strange = (key for key in error.instance if key not in known and not any(form.search(key) for form in patterns))
+    for name in islice(strange, MOST_KEYS):
         values: dict[str, Any] = {"name": name, "where": path_text(path)}
         near = nearest(name, (key for key in known if key not in error.instance))
         if near is not None:

@@ -15,6 +15,7 @@ _TYPES: Final = {
     "object": "a mapping of keys and values",
     "null": "nothing",
 }
+ANSWERS: Final = {"yes": "true", "on": "true", "y": "true", "no": "false", "off": "false", "n": "false"}
 _NUMBER: Final = re.compile(r"([-+]?)([0-9][0-9 \u00a0\u202f]*)(?:([.,])([0-9]+))?\s*(.*)\Z", re.DOTALL)
 _UNIT: Final = re.compile(r"[a-zA-Zµ°%/²³ ^0-9]{1,12}\Z")
 
@@ -28,8 +29,7 @@ class Meant(NamedTuple):
 
 def wanted_word(types: str | list[str]) -> str:
     """What a schema's `type` asks for."""
-    names = [types] if isinstance(types, str) else types
-    return " or ".join(_TYPES[name] for name in names)
+    return choices_word([_TYPES[types]] if isinstance(types, str) else [_TYPES[name] for name in types])
 
 
 def range_word(schema: Mapping[str, Any]) -> str:

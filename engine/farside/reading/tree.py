@@ -1,6 +1,6 @@
 """Builds data and the place of everything in it from what a parser meets, and refuses what may not be."""
 
-from typing import Any, Final
+from typing import Any, Final, NoReturn
 
 from .characters import is_half, unwelcome_in_text, whole_text
 from .faults import Fault
@@ -77,10 +77,14 @@ class Tree:
         try:
             value = resolved(word)
         except NotFinite:
-            raise Fault("not-finite", *at, where=self._where(), value=word) from None
+            self.refuse_number(word, at)
         except TooLong:
             raise Fault("number-too-long", *at, where=self._where(), digits=len(word), most=LONGEST_NUMBER) from None
         self._scalar(value, at, anchor)
+
+    def refuse_number(self, word: str, at: At) -> NoReturn:
+        """A number that is not finite."""
+        raise Fault("not-finite", *at, where=self._where(), value=word) from None
 
     def text(self, text: str, at: At, anchor: str | None = None) -> None:
         """A scalar in quotes or a block of text."""
