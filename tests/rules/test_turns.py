@@ -57,8 +57,8 @@ def worst_by_rule(report: Any) -> dict[str, str]:
     worst: dict[str, str] = {}
     for finding in report.findings:
         if finding.finding != "clear":
-            best = worst.get(finding.rule, "clear")
-            worst[finding.rule] = min(best, finding.finding, key=SEVERITY.index)
+            known = worst.get(finding.rule.id, "clear")
+            worst[finding.rule.id] = min(known, finding.finding, key=SEVERITY.index)
     return worst
 
 
@@ -102,7 +102,7 @@ def test_example_plans_keep_their_verdicts(plan: str, verdict: str) -> None:
 
 def test_the_deep_box_stops_on_its_first_increment_alone() -> None:
     report = farside.check(data_of(CLINIC / "plans" / "deep-box.yaml"), list(cards()))
-    stops = [(finding.rule, finding.where["increment"]) for finding in report.findings if finding.finding == "stop"]
+    stops = [(finding.rule.id, finding.where["increment"]) for finding in report.findings if finding.finding == "stop"]
     assert stops == [("far-side-dose", 1)]
 
 
