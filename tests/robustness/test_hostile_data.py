@@ -66,10 +66,9 @@ def problems_of(data, kind):
 
 @given(damaged(), st.sampled_from(["own", *sorted(set(SCHEMAS) - {"common"})]))
 def test_damaged_data_is_kept_or_refused_in_words(data, kind):
-    own = data.get("kind")
-    problems, printed = problems_of(
-        data, own if kind == "own" and own in SCHEMAS else "plan" if kind == "own" else kind
-    )
+    own = str(data.get("kind"))
+    chosen = kind if kind != "own" else own if own in SCHEMAS else "plan"
+    problems, printed = problems_of(data, chosen)
     assert len(printed) < 2_000
     for problem in problems:
         assert problem.place.line == 0
