@@ -215,8 +215,9 @@ def _no_branch(document: Document, error: Any, branches: dict[int, list[Any]], p
             chosen = [root.validator_value] if root.validator == "const" else root.validator_value
             names.extend(choice for choice in chosen if isinstance(choice, str))
             words.append(choices_word(chosen))
-    choices = " or ".join(words)
-    value = error.instance
+    value, choices = error.instance, " or ".join(dict.fromkeys(words))
+    if not names:
+        return document.problem(MESSAGES, "type", path, found=type_word(value), wanted=choices)
     if not isinstance(value, str):
         return document.problem(MESSAGES, "choice-type", path, found=type_word(value), choices=choices)
     near = nearest(value, names)
