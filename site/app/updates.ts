@@ -26,11 +26,15 @@ async function register(): Promise<ServiceWorkerRegistration | undefined> {
   }
 }
 
-/** True once the whole site is kept and works without a network; false where it cannot be kept. */
+/**
+ * True once the whole site is kept and works without a network; false where it cannot be kept. The document carries it
+ * too, as data-offline="ready", for whatever looks from outside.
+ */
 export async function readyOffline(): Promise<boolean> {
   const registration = await keepOffline();
   if (!registration) return false;
   await navigator.serviceWorker.ready;
+  document.documentElement.dataset["offline"] = "ready";
   return true;
 }
 

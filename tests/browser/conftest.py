@@ -12,6 +12,8 @@ from making.places import BUILD
 from making.server import Server
 from playwright.sync_api import Browser, BrowserContext, ConsoleMessage, Page, Request, expect, sync_playwright
 
+OFFLINE = 'html[data-offline="ready"]'
+
 expect.set_options(timeout=30_000)  # the first start of the engine, on a busy machine
 
 
@@ -86,5 +88,5 @@ def page(context: BrowserContext, home: str) -> Page:
     """The front page, with the engine ready and the whole site kept for offline use."""
     page = context.new_page()
     page.goto(home)
-    expect(page.locator(".offline")).to_be_visible()
+    expect(page.locator(OFFLINE)).to_be_attached()
     return page

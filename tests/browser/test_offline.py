@@ -6,13 +6,12 @@ from collections.abc import Iterator
 from pathlib import Path
 
 import pytest
-from browser.conftest import Watch
+from browser.conftest import OFFLINE, Watch
 from making.environment import node
 from making.places import SITE
 from making.server import Server
 from playwright.sync_api import Browser, BrowserContext, Page, expect
 
-OFFLINE = ".offline"
 UPDATE = ".update"
 VERDICT = ".verdict"
 
@@ -25,7 +24,7 @@ def test_works_with_the_network_off(page: Page, context: BrowserContext) -> None
     said = page.locator(VERDICT).first.inner_text()
     context.set_offline(True)
     page.reload()
-    expect(page.locator(OFFLINE)).to_be_visible()
+    expect(page.locator(OFFLINE)).to_be_attached()
     expect(page.locator(VERDICT).first).to_have_text(said, use_inner_text=True)
 
 
@@ -78,7 +77,7 @@ def test_a_new_version_waits_for_the_word(browser: Browser, two_versions: Path, 
     page = context.new_page()
     another = page.locator('meta[name="edition"]')
     page.goto(changing_home)
-    expect(page.locator(OFFLINE)).to_be_visible()
+    expect(page.locator(OFFLINE)).to_be_attached()
     expect(page.locator(UPDATE)).to_have_count(0)
 
     publish_another(two_versions)
@@ -90,7 +89,7 @@ def test_a_new_version_waits_for_the_word(browser: Browser, two_versions: Path, 
 
     page.locator(UPDATE).get_by_role("button").click()
     expect(another).to_have_count(1)
-    expect(page.locator(OFFLINE)).to_be_visible()
+    expect(page.locator(OFFLINE)).to_be_attached()
     expect(page.locator(UPDATE)).to_have_count(0)
     context.close()
     assert watch.troubles == []
