@@ -1,5 +1,5 @@
 /** Opens the files a person chose: all of them or, where one is refused, none. */
-import type { Card, Clinic, Data, Plan, Problem, ReadAnswer } from "./types";
+import { problemsOf, type Card, type Clinic, type Data, type Plan, type Problem, type ReadAnswer } from "./types";
 import { words } from "./words/index";
 
 /** A little over the engine's own limit, so that the engine is the one to say that a file is too large. */
@@ -27,7 +27,7 @@ export async function openFiles(files: readonly File[], read: Reader): Promise<O
       continue;
     }
     const answer = await read(file.name, text);
-    if (!answer.ok) problems.push(...answer.problems);
+    if (!answer.ok) problems.push(...problemsOf(answer));
     else if (answer.kind === "plan") plans.push(answer.data as Plan);
     else if (CARDS.has(answer.kind)) cards.push(answer.data as Card);
     else if (answer.kind === "clinic") clinic = answer.data as Data;

@@ -49,9 +49,9 @@ export function choicesAt(path: Path): readonly string[] {
   return words.filter((word): word is string => typeof word === "string");
 }
 
-/** The number that counts where the plan says nothing, if the schema names one. */
-export function defaultAt(path: Path): number | undefined {
-  return schemasAt(path).map((schema) => schema.default).find((value) => typeof value === "number");
+/** The number or word that counts where the plan says nothing, if the schema names one. */
+export function defaultAt(path: Path): number | string | undefined {
+  return schemasAt(path).map((schema) => schema.default).find((value): value is number | string => typeof value === "number" || typeof value === "string");
 }
 
 /** Every schema that speaks of the place, through references and alternatives. */

@@ -4,7 +4,7 @@ import { startEngine, type Engine } from "./engine";
 import { keep, lastKept } from "./keep";
 import { fileName, openFiles, saveText } from "./open";
 import { cardsOf, clinicOf, firstState, next, type State } from "./state";
-import type { Answer, Plan, ReadAnswer, Start } from "./types";
+import { problemsOf, type Answer, type Plan, type ReadAnswer, type Start } from "./types";
 import { keepOffline, offerUpdate, readyOffline } from "./updates";
 import { App } from "./views/app";
 import { words } from "./words/index";
@@ -58,7 +58,7 @@ export function Session() {
     const tried = next(state, { is: "opened", ...found });
     const answer = await asked.call<Answer>(question(tried));
     if (answer.ok || found.plan === null) send({ is: "opened", ...found });
-    else send({ is: "unopened", problems: answer.problems });
+    else send({ is: "unopened", problems: problemsOf(answer) });
   };
 
   const save = async () => {

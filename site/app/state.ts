@@ -2,7 +2,7 @@
 import type { Kept } from "./keep";
 import { edited, movedIncrement, newPlan, withIncrement, withoutIncrement } from "./plan";
 import { samePath } from "./paths";
-import type { Answer, Card, Clinic, Drawing, Json, Path, Plan, Problem, Report, Start } from "./types";
+import { problemsOf, type Answer, type Card, type Clinic, type Drawing, type Json, type Path, type Plan, type Problem, type Report, type Start } from "./types";
 import { words } from "./words/index";
 
 export type Panel = "increment" | "cavity" | "lamp" | "adhesive" | "room";
@@ -27,8 +27,15 @@ export interface State {
   readonly selected: number;
   readonly panel: Panel;
   readonly filesShown: boolean;
-  readonly past: readonly Plan[];
-  readonly future: readonly Plan[];
+  readonly past: readonly Version[];
+  readonly future: readonly Version[];
+  /** Where the last edit was typed: further letters there are the same step of undoing. */
+  readonly typing: string | null;
+}
+
+export interface Version {
+  readonly plan: Plan;
+  readonly from: string;
 }
 
 export type Action =
@@ -62,7 +69,7 @@ export function firstState(kept: Kept | null): State {
     cards: kept?.cards ?? [],
     clinic: kept?.clinic ?? null,
     answered: null, refused: null, unopened: [], opened: [],
-    selected: 0, panel: "increment", filesShown: false, past: [], future: [],
+    selected: 0, panel: "increment", filesShown: false, past: [], future: [], typing: null,
   };
 }
 
@@ -73,7 +80,7 @@ export function next(state: State, action: Action): State {
     case "trouble": return { ...state, trouble: action.says };
     case "started": return started({ ...state, start: action.start, progress: 1, trouble: null });
     case "answered": return answeredWith(state, action.plan, action.answer);
-    case "edit": return changed(state, edited(state.plan, clinicOf(state), action.path, action.value));
+    case "edit": return typed(state, action.path, action.value);
     case "add": return { ...changed(state, withIncrement(state.plan, state.selected, action.copy)), selected: state.selected + 1, panel: "increment" };
     case "remove": return { ...changed(state, withoutIncrement(state.plan, state.selected)), selected: Math.max(0, state.selected - 1) };
     case "move": return { ...changed(state, movedIncrement(state.plan, state.selected, action.by)), selected: state.selected + action.by };
@@ -116,12 +123,22 @@ function started(state: State): State {
 
 function answeredWith(state: State, plan: Plan, answer: Answer): State {
   if (answer.ok) return { ...state, answered: { plan, report: answer.report, drawing: answer.drawing }, refused: null, trouble: null };
-  return { ...state, refused: { plan, problems: answer.problems } };
+  return { ...state, refused: { plan, problems: problemsOf(answer) } };
 }
 
 function changed(state: State, plan: Plan): State {
   if (plan === state.plan) return state;
-  return { ...state, plan, touched: true, past: [...state.past, state.plan].slice(-MOST_UNDO), future: [] };
+  return { ...state, plan, touched: true, past: [...state.past, versionOf(state)].slice(-MOST_UNDO), future: [], typing: null };
+}
+
+function typed(state: State, path: Path, value: Json | undefined): State {
+  const place = typeof value === "string" ? path.join("/") : null;
+  const next = changed(state, edited(state.plan, clinicOf(state), path, value));
+  return { ...next, past: place !== null && place === state.typing ? state.past : next.past, typing: place };
+}
+
+function versionOf({ plan, from }: State): Version {
+  return { plan, from };
 }
 
 function replaced(state: State, plan: Plan, from: string): State {
@@ -144,15 +161,15 @@ function openedWith(state: State, opened: Extract<Action, { is: "opened" }>): St
 }
 
 function undone(state: State): State {
-  const plan = state.past.at(-1);
-  if (plan === undefined) return state;
-  return within({ ...state, plan, past: state.past.slice(0, -1), future: [state.plan, ...state.future] });
+  const version = state.past.at(-1);
+  if (version === undefined) return state;
+  return within({ ...state, ...version, past: state.past.slice(0, -1), future: [versionOf(state), ...state.future], typing: null });
 }
 
 function redone(state: State): State {
-  const [plan, ...future] = state.future;
-  if (plan === undefined) return state;
-  return within({ ...state, plan, past: [...state.past, state.plan], future });
+  const [version, ...future] = state.future;
+  if (version === undefined) return state;
+  return within({ ...state, ...version, past: [...state.past, versionOf(state)], future, typing: null });
 }
 
 function within(state: State): State {

@@ -126,10 +126,16 @@ export interface Start {
   readonly caution: string;
 }
 
-export type Answer =
-  | { readonly ok: true; readonly report: Report; readonly drawing: Drawing }
-  | { readonly ok: false; readonly problems: readonly Problem[] };
+/** What the engine will not take, or a defect of its own. */
+export type Refusal =
+  | { readonly ok: false; readonly problems: readonly Problem[] }
+  | { readonly ok: false; readonly fault: string };
 
-export type ReadAnswer =
-  | { readonly ok: true; readonly kind: string; readonly data: Data }
-  | { readonly ok: false; readonly problems: readonly Problem[] };
+export type Answer = { readonly ok: true; readonly report: Report; readonly drawing: Drawing } | Refusal;
+export type ReadAnswer = { readonly ok: true; readonly kind: string; readonly data: Data } | Refusal;
+
+/** The problems of a refusal; a defect of the engine is said as one, with no place. */
+export function problemsOf(refusal: Refusal): readonly Problem[] {
+  if ("problems" in refusal) return refusal.problems;
+  return [{ file: "", line: 0, column: 0, path: [], message: refusal.fault, text: "", shown: refusal.fault }];
+}

@@ -26,7 +26,7 @@ function Line({ drawing, width }: { readonly drawing: Drawing; readonly width: n
   const ticks = Array.from({ length: Math.floor(span / every) + 1 }, (_, index) => index * every);
   const base = TOP + HIGH;
   return (
-    <svg width={width} height={base + 44} viewBox={`0 0 ${width} ${base + 44}`} role="img" aria-label={words.clock.describe}>
+    <svg width={width} height={base + 50} viewBox={`0 0 ${width} ${base + 50}`} role="img" aria-label={words.clock.describe}>
       {layersOf(drawing.clock).map(({ label, start, end }) => (
         <g key={start}>
           <path class="bracket" d={`M${x(start) + 1} ${TOP - 3}v-3H${x(end) - 1}v3`} />
@@ -38,14 +38,15 @@ function Line({ drawing, width }: { readonly drawing: Drawing; readonly width: n
         const place = drawing.clock.find((step) => step.what === "place" && step.layer === "increment" && step.number === number);
         if (place === undefined || window === null) return null;
         const [from, to] = [x(place.start_s), Math.min(width - 1, x(place.start_s + window))];
+        const y = base + (number % 2 === 1 ? 6 : 13);
         const over = placing !== null && placing > window;
-        return <path key={number} class={over ? "window over" : "window"} d={`M${from} ${base + 7}H${to}M${from} ${base + 4}v6M${to} ${base + 4}v6`} />;
+        return <path key={number} class={over ? "window over" : "window"} d={`M${from} ${y}H${to}M${from} ${y - 3}v6M${to} ${y - 3}v6`} />;
       })}
-      <path class="time" d={`M1 ${base + 18}H${width - 1}`} />
+      <path class="time" d={`M1 ${base + 24}H${width - 1}`} />
       {ticks.map((tick) => (
         <g key={tick}>
-          <path class="time" d={`M${x(tick)} ${base + 18}v5`} />
-          <text x={x(tick)} y={base + 37} text-anchor={tick === 0 ? "start" : x(tick) > width - 16 ? "end" : "middle"}>{tick === 0 ? "0 s" : tick}</text>
+          <path class="time" d={`M${x(tick)} ${base + 24}v5`} />
+          <text x={x(tick)} y={base + 43} text-anchor={tick === 0 ? "start" : x(tick) > width - 16 ? "end" : "middle"}>{tick === 0 ? "0 s" : tick}</text>
         </g>
       ))}
     </svg>

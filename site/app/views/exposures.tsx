@@ -19,7 +19,7 @@ export function Exposures({ state, send, path, firstShown = false }: ExposuresPr
   return (
     <div class="exposures">
       {list.length === 0 && <p class="hint">{words.exposure.none}</p>}
-      {list.map((_, index) => (
+      {list.map((exposure, index) => (
         <section key={index} class="exposure" aria-label={words.exposure.title(index + 1)}>
           <div class="exposure-head">
             <h4>{words.exposure.title(index + 1)}</h4>
@@ -31,7 +31,7 @@ export function Exposures({ state, send, path, firstShown = false }: ExposuresPr
             {!(firstShown && index === 0) && EXPOSURE_FIRST.map((field) => (
               <FieldView key={field.name} state={state} send={send} under={[...path, index]} field={field} />
             ))}
-            {EXPOSURE_MORE.map((field) => (
+            {EXPOSURE_MORE.filter((field) => field.name !== "side" || exposure["from"] === "side").map((field) => (
               <FieldView key={field.name} state={state} send={send} under={[...path, index]} field={field} />
             ))}
           </div>

@@ -24,7 +24,8 @@ interface FieldProps extends Part {
 export function FieldView({ state, send, under, field, label = words.fields[field.name] }: FieldProps) {
   const path = [...under, field.name];
   const id = path.join("-");
-  const value = effective(state.plan, clinicOf(state), path);
+  const assumed = defaultAt(path);
+  const value = effective(state.plan, clinicOf(state), path) ?? assumed;
   const usual = at(clinicOf(state)?.usual, path);
   const problem = problemAt(state, path);
   const set = (next: number | string | boolean | readonly string[] | undefined) => send({ is: "edit", path, value: next });
@@ -32,15 +33,16 @@ export function FieldView({ state, send, under, field, label = words.fields[fiel
     case "number":
       return (
         <Stepper
-          key={id} id={id} label={label} value={typeof value === "number" ? value : defaultAt(path)} range={rangeAt(path)}
+          key={id} id={id} label={label} value={typeof value === "number" ? value : undefined} range={rangeAt(path)}
           step={field.step} start={field.start} optional={field.optional} problem={problem} onValue={set}
         />
       );
     case "choice": {
       const options = (field.options ?? choicesAt(path)).map((word) => ({ value: word, label: optionWord(field.name, word) }));
-      const answers = field.optional && !options.some((option) => option.value === "unanswered") ? [empty(usual, field.name), ...options] : options;
-      const own = at(state.plan, path);
-      return <Choice id={id} label={label} value={typeof own === "string" ? own : field.optional ? "" : String(value ?? "")} options={answers} problem={problem} onValue={(word) => set(word || undefined)} />;
+      const open = field.optional && assumed === undefined && !options.some((option) => option.value === "unanswered");
+      const answers = open ? [empty(usual, field.name), ...options] : options;
+      const shown = open ? at(state.plan, path) : value;
+      return <Choice id={id} label={label} value={typeof shown === "string" ? shown : ""} options={answers} problem={problem} onValue={(word) => set(word || undefined)} />;
     }
     case "answer": {
       const options = [empty(usual, field.name), { value: "yes", label: words.options.yes }, { value: "no", label: words.options.no }];

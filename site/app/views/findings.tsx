@@ -58,7 +58,7 @@ function One({ group, pages }: { readonly group: Group; readonly pages: (rule: s
     <article class={`finding ${mark}`}>
       <MarkWord mark={mark} />
       <div class="told">
-        {distinct(findings.map((finding) => finding.says)).map((says) => <h3 key={says}>{says}</h3>)}
+        {distinct(findings.map((finding) => finding.says)).map((says, index) => (index === 0 ? <h3 key={says}>{says}</h3> : <p key={says} class="says">{says}</p>))}
         {missing.length > 0 && <p class="missing">{words.findings.missing(missing)}</p>}
         <Ruler findings={findings} />
         {distinct(findings.map((finding) => finding.do)).map((text) => <p key={text} class="do">{text}</p>)}

@@ -53,8 +53,8 @@ function Curve({ increment, scale, at, wall, chosen }: CurveProps) {
   const { top_mm: top, bottom_mm: bottom, profile, far_share: far, far_shown: shown, short_from_mm: short, finding } = increment;
   const y = scale.y(bottom);
   const points = profile.map(([depth, share]) => `${at(share).toFixed(1)} ${scale.y(top + depth).toFixed(1)}`);
-  const lacking = short === null ? [] : profile.filter(([depth]) => depth >= short);
-  const lack = lacking.map(([depth, share]) => `${at(share).toFixed(1)} ${scale.y(top + depth).toFixed(1)}`);
+  const lacking = far !== null && far < 1;
+  const lack = profile.filter(([depth]) => short !== null && depth >= short).map(([depth, share]) => `${at(share).toFixed(1)} ${scale.y(top + depth).toFixed(1)}`);
   return (
     <g class={chosen ? "curve chosen" : "curve"}>
       <path class="leader" d={`M${wall} ${y}H${scale.plotRight}`} />
@@ -62,8 +62,8 @@ function Curve({ increment, scale, at, wall, chosen }: CurveProps) {
         <path fill="url(#hatch)" d={`M${at(1)} ${scale.y(top + short)}L${lack.join("L")}L${at(1)} ${y}z`} />
       )}
       {points.length > 1 && <path class="curve-line" d={`M${points.join("L")}`} />}
-      {far !== null && <circle class={`far ${finding}`} cx={at(far)} cy={y} r="4" />}
-      <text class={`far-word ${finding}`} x={scale.plotLeft - 8} y={y - 5} text-anchor="end">{shown ?? "–"}</text>
+      {far !== null && <circle class={lacking ? "far stop" : "far"} cx={at(far)} cy={y} r="4" />}
+      <text class={lacking ? "far-word stop" : "far-word"} x={scale.plotLeft - 8} y={y - 5} text-anchor="end">{shown ?? "–"}</text>
       <MarkAt mark={finding} x={scale.toothRight + 9} y={y - 10} />
     </g>
   );

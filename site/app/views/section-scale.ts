@@ -3,9 +3,9 @@ import type { Drawing } from "../types";
 import type { Size } from "./size";
 
 const GUTTER = 40;
-const PLOT = 158;
-const PLOT_NARROW = 132;
-const FIGURES = 62;
+const PLOT = 162;
+const PLOT_NARROW = 140;
+const FIGURES = 72;
 const TIP_BODY = 34;
 const BELOW_PULP = 38;
 const WALL_MM = 2.1;

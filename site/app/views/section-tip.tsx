@@ -22,7 +22,7 @@ export function Tip({ drawing, scale, tilt, offset, side }: TipProps) {
   const edge = (sign: 1 | -1) => [x + sign * half * Math.cos(turn), y - sign * half * Math.sin(turn)] as const;
   const [left, right] = [edge(-1), edge(1)];
   const mouth = Math.min(cavity.width_mm, tip.diameter_mm * 2) / 2;
-  const axis = (cavity.depth_mm + tip.gap_mm) * scale.perMm;
+  const axis = (tip.gap_mm * scale.perMm) / Math.max(0.2, Math.cos(turn));
   return (
     <g class={side ? "tip aside" : "tip"} aria-hidden="true">
       <path class="beam-edge" d={`M${left.join(" ")}L${scale.x(-mouth)} ${scale.y(0)}M${right.join(" ")}L${scale.x(mouth)} ${scale.y(0)}`} />

@@ -14,7 +14,7 @@ export function Tools({ state, send, offline }: Part & { readonly offline: boole
       <button type="button" class="sign" aria-label={words.tools.redo} title={words.tools.redo} disabled={state.future.length === 0} onClick={() => send({ is: "redo" })}>
         <Icon name="redo" />
       </button>
-      <span class="gap">{offline && words.update.offline}</span>
+      <span class="gap">{offline && <span class="offline">{words.update.offline}</span>}</span>
       <a class="button" href="how-to-use/">{words.tools.help}</a>
       <button type="button" class="sign" aria-label={words.tools.look} title={words.tools.look} onClick={look}><Icon name="look" /></button>
     </div>

@@ -154,8 +154,8 @@ export const en = {
     filter_transmittance_share: "Share the filter lets by",
     exposures_today_count: "Exposures today",
     loupes: "Loupes worn",
-    light_sensitive: "Someone light-sensitive",
-    eye_condition: "Someone with an eye condition",
+    light_sensitive: "Anyone light-sensitive",
+    eye_condition: "Any eye condition",
   },
   options: {
     yes: "Yes", no: "No", unanswered: "Not answered", none: "None",
