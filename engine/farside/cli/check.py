@@ -10,9 +10,11 @@ from typing import TYPE_CHECKING, Final
 
 from farside.check import check
 from farside.clinic.cards import card_documents, card_folders
+from farside.clinic.reading import read_file
 from farside.export.csv_table import as_csv
 from farside.export.text import as_text
 from farside.protocol.report import Report
+from farside.reading.characters import LARGEST
 from farside.reading.document import Document, read_document
 
 if TYPE_CHECKING:
@@ -20,7 +22,6 @@ if TYPE_CHECKING:
 
 _STANDARD_INPUT: Final = "-"
 _FINE: Final = frozenset({"clear", "watch"})
-_LARGEST_READ: Final = 1_000_001
 
 
 def as_json(report: Report) -> str:
@@ -67,21 +68,16 @@ def run(called: argparse.Namespace) -> int:
 def _plan(name: str) -> tuple[Document, Path]:
     """The plan, and the path that its cards are looked for beside."""
     if name == _STANDARD_INPUT:
-        return read_document(sys.stdin.buffer.read(_LARGEST_READ), "standard input"), Path.cwd() / "plan"
+        return read_document(sys.stdin.buffer.read(LARGEST + 1), "standard input"), Path.cwd() / "plan"
     path = Path(name)
-    return _read(path), path
+    return read_file(path), path
 
 
 def _clinic(named: Path | None, plan: Path) -> Document | None:
     usual = plan.parent.parent / "clinic.yaml"
     if named is not None:
-        return _read(named)
-    return _read(usual) if usual.is_file() else None
-
-
-def _read(path: Path) -> Document:
-    with path.open("rb") as file:
-        return read_document(file.read(_LARGEST_READ), str(path))
+        return read_file(named)
+    return read_file(usual) if usual.is_file() else None
 
 
 def _folder(text: str) -> Path:

@@ -7,12 +7,11 @@ from typing import Final
 from farside.clinic.lamp import Lamp
 from farside.clinic.materials import Composite, Layer
 from farside.clinic.read_cards import read_composite, read_lamp, read_layer
-from farside.clinic.reading import refuse, unknown_card
-from farside.reading.document import Document, read_document
+from farside.clinic.reading import read_file, refuse, unknown_card
+from farside.reading.document import Document
 
 _BESIDE_A_PLAN: Final = (".", "../lamps", "../composites", "../adhesives", "../liners")
 _ENDINGS: Final = frozenset({".yaml", ".yml", ".json"})
-
 
 _READERS: Final[Mapping[str, Callable[[Document], Lamp | Composite | Layer]]] = {
     "lamp": read_lamp,
@@ -102,7 +101,7 @@ def card_documents(folders: Iterable[Path], passed_over: Path | None = None) -> 
             if path.suffix not in _ENDINGS or not path.is_file() or path.resolve() in met:
                 continue
             met.add(path.resolve())
-            found.append(read_document(path.read_bytes(), str(path)))
+            found.append(read_file(path))
     return found
 
 

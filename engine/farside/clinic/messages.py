@@ -27,5 +27,6 @@ MESSAGES: Final[Mapping[str, str]] = {
     ),
     "fills-past-tip": "the increments reach {filled} mm up from the floor, past the lamp's tip at {tip} mm",
     "side-distance": "an exposure from the side needs its own tip_distance_mm",
-    "date-impossible": "{found} is no date; write it as 2026-11-30",
+    "light-unknown": 'no light of a room is called "{what}"; those known are {known}',
+    "light-unknown-near": 'no light of a room is called "{what}"; did you mean "{near}"?',
 }

@@ -5,11 +5,13 @@ from collections.abc import Mapping
 from datetime import date
 from typing import Any, Final
 
+from farside import shipped
 from farside.clinic.cards import Cards
 from farside.clinic.plan import Exposure, Increment, LayerUse, Plan, RoomSource
 from farside.clinic.reading import Path, checked, day, filled, refuse
 from farside.clinic.usual import with_usual
 from farside.reading.document import Document
+from farside.reading.schema import nearest
 
 _NEEDED: Final = (
     ("lamp", "card"),
@@ -19,6 +21,7 @@ _NEEDED: Final = (
     ("cavity", "width_mm"),
     ("gap_mm",),
 )
+_LAYERS: Final = ("adhesive", "liner")
 _NOT_USED: Final = "not-used"
 
 
@@ -42,9 +45,9 @@ def read_plan(document: Document, cards: Cards, clinic: Document | None = None, 
         When the plan, merged with the usual values, lacks a needed value, names a card or mode that is not there, or
         does not fit its own cavity.
     """
-    checked(document)
+    checked(document, "plan")
     if clinic is not None:
-        checked(clinic)
+        checked(clinic, "clinic")
     data = filled(with_usual(document, clinic), "plan")
     _refuse_missing(document, data)
     lamp = cards.lamp(data["lamp"]["card"], document, ("lamp", "card"))
@@ -56,7 +59,6 @@ def read_plan(document: Document, cards: Cards, clinic: Document | None = None, 
         _increment(document, cards, entry, ("increments", index)) for index, entry in enumerate(data["increments"])
     )
     _refuse_unfit(document, data, increments)
-    room = data.get("room", {}).get("sources")
     return Plan(
         title=data["title"],
         on=on or day(data.get("on")) or date.today(),
@@ -69,9 +71,7 @@ def read_plan(document: Document, cards: Cards, clinic: Document | None = None, 
         gap_mm=float(data["gap_mm"]),
         adhesive=_layer_use(document, cards, data, "adhesive"),
         liner=_layer_use(document, cards, data, "liner"),
-        room=None
-        if room is None
-        else tuple(RoomSource(light["what"], float(light["illuminance_lx"]), light["filter"]) for light in room),
+        room=_room(document, data.get("room", {}).get("sources")),
         increments=increments,
         after=_exposures(document, data.get("after", ()), ("after",)),
         fields=data,
@@ -89,6 +89,9 @@ def _refuse_missing(document: Document, data: Mapping[str, Any]) -> None:
         if "composite" not in increment:
             what = f"increments[{index}].composite"
             refuse(document, "missing-after-usual", ("increments", index, "composite"), what=what)
+    for kind in _LAYERS:
+        if isinstance(data.get(kind), Mapping) and "card" not in data[kind]:
+            refuse(document, "missing-after-usual", (kind, "card"), what=f"{kind}.card")
 
 
 def _refuse_unfit(document: Document, data: Mapping[str, Any], increments: tuple[Increment, ...]) -> None:
@@ -128,6 +131,20 @@ def _layer_use(document: Document, cards: Cards, data: Mapping[str, Any], kind: 
         return None
     layer = cards.layer(kind, use["card"], document, (kind, "card"))
     return LayerUse(layer, _exposures(document, use.get("exposures", ()), (kind, "exposures")))
+
+
+def _room(document: Document, sources: Any) -> tuple[RoomSource, ...] | None:
+    """The room's lights; None where the plan does not say, none at all where it is dark."""
+    if sources is None:
+        return None
+    known = [row["id"] for row in shipped.table("room-lights")["rows"]]
+    for index, light in enumerate(sources):
+        what, path = light["what"], ("room", "sources", index, "what")
+        if what not in known and (near := nearest(what, known)) is not None:
+            refuse(document, "light-unknown-near", path, what=what, near=near)
+        if what not in known:
+            refuse(document, "light-unknown", path, what=what, known=", ".join(known))
+    return tuple(RoomSource(light["what"], float(light["illuminance_lx"]), light["filter"]) for light in sources)
 
 
 def _exposures(document: Document, entries: Any, path: Path) -> tuple[Exposure, ...]:

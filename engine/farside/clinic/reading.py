@@ -2,12 +2,14 @@
 
 from collections.abc import Mapping
 from datetime import date
+from pathlib import Path as File
 from typing import Any, Final, NoReturn
 
 from farside import shipped
 from farside.clinic.messages import MESSAGES
+from farside.reading.characters import LARGEST
 from farside.reading.defaults import with_defaults
-from farside.reading.document import Document
+from farside.reading.document import Document, read_document
 from farside.reading.problems import Refused
 from farside.reading.schema import check_schema, nearest
 
@@ -42,16 +44,33 @@ def kind_of(document: Document) -> str:
     return str(kind)
 
 
-def checked(document: Document) -> Document:
-    """A document whose kind is known and which keeps to that kind's schema.
+def checked(document: Document, wanted: str | None = None) -> Document:
+    """A document whose kind is known, or the one that is wanted, and which keeps to that kind's schema.
 
     Raises
     ------
     Refused
         With each problem at its place.
     """
-    check_schema(document, shipped.schema(kind_of(document)), tuple(shipped.schemas().values()))
+    kind = kind_of(document)
+    if wanted not in {None, kind}:
+        refuse(document, "kind-other", ("kind",), found=kind, wanted=wanted)
+    check_schema(document, shipped.schema(kind), tuple(shipped.schemas().values()))
     return document
+
+
+def read_file(file: File) -> Document:
+    """One file of a clinic, parsed; of one that is too large no more is read than shows it.
+
+    Raises
+    ------
+    Refused
+        With one placed problem.
+    OSError
+        When it cannot be opened.
+    """
+    with file.open("rb") as opened:
+        return read_document(opened.read(LARGEST + 1), str(file))
 
 
 def filled(data: Mapping[str, Any], kind: str) -> dict[str, Any]:

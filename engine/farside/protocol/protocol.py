@@ -9,8 +9,9 @@ from farside import shipped
 from farside.protocol.canonical import digest
 from farside.protocol.rule import Rule, rule_of
 
-# Left out of the digest: what explains a rule but requires nothing.
+# Left out of the digest: what explains a rule, or one of its limits, and requires nothing.
 _EXPLAINS: Final = frozenset({"examples", "why", "history"})
+_EXPLAINS_LIMIT: Final = frozenset({"why", "sources"})
 
 
 @dataclass(frozen=True, slots=True)
@@ -53,6 +54,23 @@ def base_protocol() -> Protocol:
 def protocol_of(head: Mapping[str, Any], rules: tuple[Rule, ...]) -> Protocol:
     """A protocol from its head and its rules."""
     ordered = tuple(sorted(rules, key=lambda rule: rule.id))
-    required = [{key: value for key, value in rule.data.items() if key not in _EXPLAINS} for rule in ordered]
-    whole = {"id": head["id"], "edition": head["edition"], "rules": required}
+    whole = {"id": head["id"], "edition": head["edition"], "rules": [_required(rule.data) for rule in ordered]}
     return Protocol(head["id"], head["title"], head["edition"], ordered, digest(whole))
+
+
+def _required(rule: Mapping[str, Any]) -> dict[str, Any]:
+    """A rule's data without what explains it; a limit keeps its sources' keys."""
+    required = {key: value for key, value in rule.items() if key not in _EXPLAINS}
+    if "limits" in rule:
+        required["limits"] = {name: _required_limit(limit) for name, limit in rule["limits"].items()}
+    if "sources" in rule:
+        required["sources"] = _cited(rule)
+    return required
+
+
+def _required_limit(limit: Mapping[str, Any]) -> dict[str, Any]:
+    return {**{key: value for key, value in limit.items() if key not in _EXPLAINS_LIMIT}, "sources": _cited(limit)}
+
+
+def _cited(entry: Mapping[str, Any]) -> list[str]:
+    return [source["cite"] for source in entry.get("sources", ())]

@@ -1,11 +1,12 @@
 """The inputs that quantities read: whether each is there, and where it came from."""
 
-from collections.abc import Callable, Mapping
+from collections.abc import Callable, Iterable, Mapping
 from typing import Final
 
 from farside.clinic.materials import MakerRow
-from farside.clinic.provenance import Provenance, provenance, worst
+from farside.clinic.provenance import Provenance, worst
 from farside.quantities.subject import Subject
+from farside.trace.exposed import ExposureLight
 
 
 def origin(name: str, subject: Subject) -> Provenance | None:
@@ -67,11 +68,13 @@ def _ambient(subject: Subject) -> Provenance | None:
     return "assumed" if subject.composite.ambient is None else subject.composite.ambient.provenance
 
 
-def _through(subject: Subject) -> Provenance | None:
-    if subject.light is None or subject.light.exposure.through_share is None:
-        return None
-    layers = subject.light.exposure.fields["through"]
-    return worst(provenance(layer.get("provenance", "measured")) for layer in layers)
+def _through(lights: Callable[[Subject], Iterable[ExposureLight]]) -> Callable[[Subject], Provenance | None]:
+    """What passes the overlays of some exposures; a plan gives it as it gives a thickness."""
+
+    def of_lights(subject: Subject) -> Provenance | None:
+        return None if any(light.exposure.through_share is None for light in lights(subject)) else "measured"
+
+    return of_lights
 
 
 _ORIGINS: Final[Mapping[str, Callable[[Subject], Provenance | None]]] = {
@@ -85,11 +88,8 @@ _ORIGINS: Final[Mapping[str, Callable[[Subject], Provenance | None]]] = {
     "composite.ambient": _ambient,
     "adhesive.maker_instructions": _layer_rows("adhesive"),
     "liner.maker_instructions": _layer_rows("liner"),
-    "exposure.through": _through,
-    "increment.through": lambda subject: (
-        None
-        if subject.increment is None
-        or any(light.exposure.through_share is None for light in subject.increment.exposures)
-        else "measured"
-    ),
+    "exposure.through": _through(lambda subject: (subject.light,) if subject.light else ()),
+    "increment.through": _through(lambda subject: subject.increment.exposures if subject.increment else ()),
+    "adhesive.through": _through(lambda subject: subject.trace.adhesive),
+    "plan.through": _through(lambda subject: subject.trace.exposures()),
 }

@@ -122,11 +122,12 @@ def _window_s(subject: Subject) -> Value | None:
 
 def _share_of_window(*names: str) -> Callable[[Subject], Value | None]:
     def value(subject: Subject) -> Value | None:
-        window_s = _window_s(subject)
         spent = [subject.field(f"increment.{name}") for name in names]
-        if window_s is None or None in spent:
+        if subject.trace.plan.room is None or subject.composite is None or None in spent:
             return None
-        return sum(map(float, spent)) / float(window_s)
+        window_s = _window_s(subject)
+        # In the dark no window ends, and none of it is used.
+        return 0.0 if window_s is None else sum(map(float, spent)) / float(window_s)
 
     return value
 

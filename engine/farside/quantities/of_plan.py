@@ -6,7 +6,7 @@ from typing import Final
 from farside.clinic.materials import chosen_row
 from farside.clinic.plan import LayerUse
 from farside.quantities.quantity import Quantity, Value
-from farside.quantities.reach import BEAM_REACH, LIGHT_REACH, beyond
+from farside.quantities.reach import ADHESIVE_REACH, BEAM_REACH, LIGHT_REACH, beyond
 from farside.quantities.subject import Subject, subjects
 from farside.trace.clock import largest_in_window
 from farside.trace.exposed import ExposureLight
@@ -16,7 +16,7 @@ from farside.trace.room import unfiltered_lx, weighted_mw_cm2
 _TO_J: Final = 1e-3
 # Sums of entered millimetres are freed of binary dust, so that what adds up on paper adds up here.
 _DECIMALS: Final = 9
-_LAYER: Final = ("lamp.readings", "lamp.beam", "plan.adhesive", "adhesive.maker_instructions")
+_LAYER: Final = ("lamp.readings", "lamp.beam", "adhesive.through", "plan.adhesive", "adhesive.maker_instructions")
 
 
 def _entered(path: str) -> Callable[[Subject], Value | None]:
@@ -92,9 +92,8 @@ def _assumed_count(subject: Subject) -> Value | None:
 
 
 def _beyond_count(subject: Subject) -> Value | None:
-    reasons = {
-        reason for increment in subjects(subject.trace, "increment") for reason in beyond(LIGHT_REACH, increment)
-    }
+    reasons = {reason for inner in subjects(subject.trace, "increment") for reason in beyond(LIGHT_REACH, inner)}
+    reasons |= {reason for inner in subjects(subject.trace, "exposure") for reason in beyond(BEAM_REACH, inner)}
     return float(len(reasons))
 
 
@@ -149,7 +148,7 @@ OF_PLAN: Final[tuple[Quantity, ...]] = (
         "radiant exposure of the adhesive at the floor over its maker's",
         _adhesive_dose_ratio,
         reads=_LAYER,
-        reach=BEAM_REACH,
+        reach=ADHESIVE_REACH,
         formula="Σ irradiance at the floor × time_s / maker's irradiance × seconds",
     ),
     Quantity(
@@ -166,7 +165,8 @@ OF_PLAN: Final[tuple[Quantity, ...]] = (
         "J/cm²",
         "the most that one spot gets in any 60 s, all exposures counted",
         _at_one_site,
-        reads=("lamp.readings", "lamp.beam"),
+        reads=("lamp.readings", "lamp.beam", "plan.through"),
+        reach=BEAM_REACH,
         formula="largest Σ irradiance × seconds in a window of 60 s",
     ),
     Quantity(
@@ -199,7 +199,7 @@ OF_PLAN: Final[tuple[Quantity, ...]] = (
         "",
         "share of a day's blue-light limit that the day's planned exposures use",
         lambda subject: day_share(subject.trace),
-        reads=("lamp.readings", "lamp.beam", "plan.team.exposures_today_count"),
+        reads=("lamp.readings", "lamp.beam", "plan.through", "plan.team.exposures_today_count"),
         reach=BEAM_REACH,
         formula="exposures × mean seconds × filter / seconds to 1e6 J/(m² sr) of light thrown back by the tooth",
     ),

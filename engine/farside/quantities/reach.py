@@ -21,6 +21,10 @@ LIGHT_REACH: Final[Reach] = {
 BEAM_REACH: Final[Reach] = {
     name: LIGHT_REACH[name] for name in ("exitance_mw_cm2", "tip_distance_mm", "tip_diameter_mm", "spread_exponent")
 }
+ADHESIVE_REACH: Final[Reach] = {
+    **{name: LIGHT_REACH[name] for name in ("exitance_mw_cm2", "tip_diameter_mm", "spread_exponent")},
+    "adhesive_tip_distance_mm": LIGHT_REACH["tip_distance_mm"],
+}
 
 
 def beyond(reach: Reach, subject: Subject) -> tuple[str, ...]:
@@ -61,8 +65,11 @@ def _thickness(subject: Subject) -> list[float]:
 
 
 def _lights(subject: Subject) -> tuple[ExposureLight, ...]:
+    """The exposures that bear on a subject: itself, an increment's own, all of a plan's."""
     if subject.light is not None:
         return (subject.light,)
+    if subject.about == "plan":
+        return subject.trace.exposures()
     return () if subject.increment is None else subject.increment.exposures
 
 
@@ -70,6 +77,7 @@ _INPUTS: Final[Mapping[str, Callable[[Subject], list[float]]]] = {
     "exitance_mw_cm2": _exitance,
     "time_s": _times,
     "tip_distance_mm": _distances,
+    "adhesive_tip_distance_mm": lambda subject: [light.tip_distance_mm for light in subject.trace.adhesive],
     "tip_diameter_mm": lambda subject: [subject.trace.plan.lamp.tip_diameter_mm],
     "spread_exponent": lambda subject: [subject.trace.plan.lamp.beam.spread_exponent],
     "absorption_per_mm": _absorption,
