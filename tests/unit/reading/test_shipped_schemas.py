@@ -81,7 +81,7 @@ def test_references_lead_somewhere(kind):
             assert isinstance(followed(part["$ref"], SCHEMAS[kind]["$id"]), dict)
 
 
-@pytest.mark.parametrize("kind", set(SCHEMAS) - {"common"})
+@pytest.mark.parametrize("kind", sorted(set(SCHEMAS) - {"common"}))
 def test_top_is_closed(kind):
     assert SCHEMAS[kind]["additionalProperties"] is False
 
