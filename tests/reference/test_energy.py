@@ -13,9 +13,9 @@ WEIGHTS = (0.11846344252809454, 0.23931433524968324, 0.28444444444444444, 0.2393
 
 
 def absorbed_share(row: dict[str, float]) -> float:
-    """Absorption times fluence over the depth, in panels that grow away from both faces."""
+    """Absorption times fluence over the depth, in panels that grow away from the lit face."""
     thickness = row["thickness_mm"]
-    shares = (0.0, 0.004, 0.02, 0.08, 0.25, 0.5, 0.75, 0.92, 0.98, 0.996, 1.0)
+    shares = (0.0, 0.03, 0.3, 1.0)
     depths = [thickness * (low + (high - low) * point) for low, high in pairwise(shares) for point in POINTS]
     lengths = [thickness * (high - low) * weight for low, high in pairwise(shares) for weight in WEIGHTS]
     fluence = slab_fluence(depths, thickness, *(row[name] for name in OPTICS))

@@ -19,8 +19,11 @@ resin that is 0.22 of the paste), bands of 20 nm at 405 and 460 nm (ours) and 4 
 0.43 at a slope of 0.032, 0.55, the middle, at 0.036, and 0.69 at 0.040.
 """
 
-DARKEST_PER_MM: Final = 5.0
-"""Largest absorption that is looked for behind a measured transmittance. [1/mm]"""
+DARKEST_PER_MM: Final = 3.0
+"""Absorption past which none is looked for behind a measured transmittance. [1/mm]"""
+
+CLOSE_ENOUGH: Final = 1e-5
+"""Share of a measured transmittance by which an inverted one may be off: far under any meter's error."""
 
 
 @dataclass(frozen=True, slots=True)
@@ -98,12 +101,12 @@ def absorption_from_transmittance(
     Returns
     -------
     float
-        Total absorption, to a thousandth of itself or 1e-5. [1/mm]
+        Total absorption, with which the transmittance comes right to ``CLOSE_ENOUGH`` of itself. [1/mm]
 
     Raises
     ------
     ValueError
-        Where no absorption up to ``DARKEST_PER_MM`` gives that transmittance.
+        Where no absorption to about ``DARKEST_PER_MM`` gives that transmittance.
 
     Examples
     --------
@@ -112,17 +115,23 @@ def absorption_from_transmittance(
     0.2
     """
 
-    def passes_more(absorption: float) -> bool:
-        made = slab(thickness_mm, absorption, reduced_scattering_per_mm, refractive_index)
-        return made.transmittance > transmittance_share
+    def excess(root: float) -> float:
+        made = slab(thickness_mm, root**2, reduced_scattering_per_mm, refractive_index)
+        return math.log(made.transmittance / transmittance_share)
 
-    low, high = 0.0, DARKEST_PER_MM
-    if not passes_more(low) or passes_more(high):
-        raise ValueError(f"no absorption passes {transmittance_share} of the light through {thickness_mm} mm")
-    while high - low > 1e-5 + 1e-3 * low:
-        middle = (low + high) / 2.0
-        low, high = (middle, high) if passes_more(middle) else (low, middle)
-    return (low + high) / 2.0
+    refusal = f"no absorption passes {transmittance_share} of the light through {thickness_mm} mm"
+    if transmittance_share <= 0.0 or (above := excess(0.0)) < 0.0:
+        raise ValueError(refusal)
+    low, high = 0.0, 0.25
+    while (below := excess(high)) > 0.0:
+        if high**2 > DARKEST_PER_MM:
+            raise ValueError(refusal)
+        low, above, high = high, below, 2.0 * high
+    # The logarithm of the transmittance bends little over the root of the absorption: a few chords land on it.
+    while abs(below) > CLOSE_ENOUGH:
+        chord = (low * below - high * above) / (below - above)
+        low, above, high, below = high, below, chord, excess(chord)
+    return high**2
 
 
 def _of_initiators(parts: Parts, wavelength_nm: float) -> float:
