@@ -7,7 +7,7 @@ import shutil
 import subprocess
 import sys
 import zipfile
-from collections.abc import Iterator
+from collections.abc import Iterable, Iterator
 from pathlib import Path
 
 from making.places import BUILD, ENGINE, SITE
@@ -41,19 +41,26 @@ LEFT_OUT = frozenset(
 KEPT_ENCODINGS = frozenset("__init__ aliases ascii cp437 latin_1 utf_8 utf_8_sig utf_16 utf_16_le utf_16_be".split())
 
 _STAGE = BUILD / "engine" / "source"
+_COMPILERS = tuple(
+    SITE / name for name in ("making/bytecode.mjs", "making/bytecode.py", "node_modules/pyodide/package.json")
+)
 
 
 def build_engine(out: Path, node: str) -> Path:
     """Writes `engine-<hash>.zip` into the folder out and returns its path; made anew only if something has changed."""
     _stage(_STAGE)
-    digest = _digest(_STAGE)
+    staged = sorted(path for path in _STAGE.rglob("*") if path.is_file())
+    compilers = _digest_of(_COMPILERS, SITE)
+    digest = hashlib.sha256((compilers + _digest_of(staged, _STAGE)).encode()).hexdigest()
     target = out / f"engine-{digest[:12]}.zip"
     kept = BUILD / "engine" / target.name
     if not kept.exists():
         for old in kept.parent.glob("engine-*.zip"):
             old.unlink()
         half = kept.with_suffix(".part")
-        subprocess.run([node, SITE / "making" / "bytecode.mjs", _STAGE, half], check=True, cwd=SITE)
+        compiled = kept.parent / f"compiled-{compilers[:12]}"
+        compiled.mkdir(exist_ok=True)
+        subprocess.run([node, SITE / "making" / "bytecode.mjs", _STAGE, compiled, half], check=True, cwd=SITE)
         half.rename(kept)
     out.mkdir(parents=True, exist_ok=True)
     shutil.copyfile(kept, target)
@@ -106,12 +113,10 @@ def _compiled_rules() -> bytes:
     return json.dumps(compiled_form(), ensure_ascii=False, separators=(",", ":")).encode()
 
 
-def _digest(folder: Path) -> str:
-    """Of the staged files and of the two scripts that compile them."""
+def _digest_of(files: Iterable[Path], below: Path) -> str:
     digest = hashlib.sha256()
-    scripts = [SITE / "making" / name for name in ("bytecode.mjs", "bytecode.py")]
-    for path in [*scripts, *sorted(path for path in folder.rglob("*") if path.is_file())]:
+    for path in files:
         content = path.read_bytes()
-        digest.update(f"{path.name}:{len(content)}:".encode())
+        digest.update(f"{path.relative_to(below).as_posix()}:{len(content)}:".encode())
         digest.update(content)
     return digest.hexdigest()
