@@ -1,7 +1,7 @@
 """A composite card's initiators and optics resolved to a paste, what is silent filled by assumptions."""
 
 from collections.abc import Mapping
-from functools import cache
+from functools import cache, lru_cache
 from typing import Any
 
 from farside import shipped
@@ -115,7 +115,13 @@ def usual_optics(shade: Mapping[str, Any]) -> Mapping[str, Any]:
 def _inverted(document: Document, optics: Mapping[str, Any], scattering: float, index: float) -> float:
     share, at_mm = float(optics["transmittance_share"]), float(optics["at_mm"])
     try:
-        return absorption_from_transmittance(share, at_mm, scattering, index)
+        return _absorption(share, at_mm, scattering, index)
     except ValueError as impossible:
         path = ("optics", "transmittance_share")
         refuse(document, "transmittance-impossible", path, share=f"{share:g}", at_mm=f"{at_mm:g}", why=impossible)
+
+
+@lru_cache(maxsize=64)
+def _absorption(share: float, at_mm: float, scattering: float, index: float) -> float:
+    """Kept, since it takes several slabs and a card is read again whenever one beside it changes."""
+    return absorption_from_transmittance(share, at_mm, scattering, index)

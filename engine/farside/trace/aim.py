@@ -9,7 +9,6 @@ from farside.physics.light.edge import smoothed_share
 _SAMPLES: Final = 41
 
 
-@lru_cache(maxsize=4096)
 def wall_share(
     distance_mm: float, offset_mm: float, tilt_deg: float, tip_mm: float, exponent: float, length_mm: float
 ) -> float:
@@ -17,7 +16,15 @@ def wall_share(
 
     `length_mm` is the paste's smoothing length; `offset_mm` is signed along the width, as the tilt is.
     """
+    if (tilt_deg, offset_mm) < (0.0, 0.0):  # the other way round is the same thing in a mirror
+        offset_mm, tilt_deg = -offset_mm, -tilt_deg
+    return _wall_share(distance_mm, offset_mm, tilt_deg, tip_mm, exponent, length_mm)
 
+
+@lru_cache(maxsize=4096)
+def _wall_share(
+    distance_mm: float, offset_mm: float, tilt_deg: float, tip_mm: float, exponent: float, length_mm: float
+) -> float:
     def profile(x_mm: float, y_mm: float) -> float:
         return surface_share(distance_mm, x_mm, tilt_deg, tip_mm, exponent, aside_mm=y_mm)
 

@@ -83,13 +83,16 @@ def off_axis_share(distance_mm: float, offset_mm: float, tip_diameter_mm: float,
     offset_mm = abs(offset_mm)
     if distance_mm == 0.0:
         return 1.0 if offset_mm < radius_mm else 0.5 if offset_mm == radius_mm else 0.0
-    height_squared = distance_mm**2
-    power = (spread_exponent + 1.0) / 2.0
-    gathered = 0.0
-    for cosine in _RIM_COSINES:
-        reach_squared = radius_mm**2 + offset_mm**2 - 2.0 * radius_mm * offset_mm * cosine
-        turned = radius_mm * (radius_mm - offset_mm * cosine) / reach_squared
-        gathered += turned * (1.0 - (height_squared / (reach_squared + height_squared)) ** power)
+    height_squared, radius_squared = distance_mm**2, radius_mm**2
+    middle, swing, power = radius_squared + offset_mm**2, radius_mm * offset_mm, (spread_exponent + 1.0) / 2.0
+    gathered: float = sum(
+        [
+            (radius_squared - swing * cosine)
+            / (reach_squared := middle - 2.0 * swing * cosine)
+            * (1.0 - (height_squared / (reach_squared + height_squared)) ** power)
+            for cosine in _RIM_COSINES
+        ]
+    )
     return min(max(gathered / RIM_POINTS, 0.0), 1.0)
 
 
