@@ -8,7 +8,7 @@ from typing import Final
 from farside.physics.light.bands import band_nodes
 from farside.physics.light.beam import off_axis_share
 from farside.physics.light.edge import smoothed_share
-from farside.physics.light.initiators import Initiator, absorption_per_mm, concentration_mol_l, dose_weight
+from farside.physics.light.initiators import Initiator, dose_weight
 from farside.physics.light.paste import Paste, absorption_at, scattering_at
 from farside.physics.light.transport import half_space_fluence
 from reference import tables
@@ -120,17 +120,5 @@ CHECKS: Final = (
             computed=partial(_photons_counted, wavelength),
         )
         for wavelength in (365.0, 405.0, 450.0, 470.0)
-    ),
-    Check(
-        id="camphorquinone-in-resin",
-        source="chen-2007",
-        says="46 L/(mol cm) at 469 nm: 0.7 % of a resin of 1.2 kg/L absorbs 0.535 per mm",
-        published=math.log(10.0) * 46.0 * (0.007 * 1200.0 / 166.22) / 10.0,
-        unit="1/mm",
-        band=1e-9,
-        sets=("camphorquinone.peak_molar_absorption",),
-        computed=lambda: absorption_per_mm(
-            tables.initiator("camphorquinone"), concentration_mol_l(0.007, 0.6, 166.22), 469.0
-        ),
     ),
 )

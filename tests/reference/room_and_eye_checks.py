@@ -1,6 +1,5 @@
 """Room lights from the CIE's illuminants by colour-science, working times, blue-light weights and seconds a day."""
 
-import math
 import warnings
 from collections.abc import Iterator
 from functools import cache, partial
@@ -16,7 +15,6 @@ if TYPE_CHECKING:
     from numpy.typing import NDArray
 
 LUMENS_PER_W: Final = 683.0
-# What colour-science gives for others of the CIE's illuminants that no row of the table stands for is not needed here.
 
 
 @cache
@@ -125,10 +123,10 @@ CHECKS: Final = (
     Check(
         id="tooth-radiance",
         source="icnirp-2013",
-        says="weight 0.80 at 460 nm; 1 000 mW/cm² on a matt tooth that sends back 0.4",
-        published=1e4 * 0.4 / math.pi * 0.80,
+        says="weight 0.80 at 460 nm; 1 000 mW/cm² on a matt tooth that sends back 0.4: 1 018.6",
+        published=1018.6,
         unit="W/(m² sr)",
-        band=1e-9,
+        band=1e-4,
         computed=partial(_radiance, 1000.0, 0.4, 460.0),
     ),
     Check(
