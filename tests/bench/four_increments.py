@@ -3,6 +3,10 @@
 from typing import Any
 
 from farside import shipped
+from farside.clinic.cards import Cards
+from farside.clinic.plan import Plan
+from farside.clinic.read_plan import read_plan
+from farside.reading.document import Document
 
 CLINIC = "example-clinic"
 FOLDERS = ("lamps", "composites", "adhesives", "liners")
@@ -10,7 +14,7 @@ COMPOSITES = ("bulk-fill", "universal-dark", "universal-medium", "universal-ligh
 
 
 def four_increments(first_mm: float = 1.5) -> dict[str, Any]:
-    """A deep box filled in four increments of four composites: four pastes, each under the lamp and the maker's light."""
+    """A deep box in four increments of four composites: each paste under the lamp and under its maker's light."""
     deep_box = shipped.document(f"{CLINIC}/plans/deep-box.yaml").data
     increment = deep_box["increments"][0]
     increments = [{**increment, "composite": name, "thickness_mm": 1.5} for name in COMPOSITES]
@@ -41,3 +45,9 @@ def request(plan: dict[str, Any]) -> dict[str, Any]:
     cards = [card.data for folder in FOLDERS for card in shipped.documents(f"{CLINIC}/{folder}")]
     clinic = shipped.document(f"{CLINIC}/clinic.yaml").data
     return {"do": "check", "plan": plan, "cards": cards, "clinic": clinic, "on": "2026-11-30"}
+
+
+def plan_of(data: dict[str, Any]) -> Plan:
+    """A plan as a record, with the clinic's cards and usual values."""
+    cards = Cards(card for folder in FOLDERS for card in shipped.documents(f"{CLINIC}/{folder}"))
+    return read_plan(Document.of(data, data["title"]), cards, shipped.document(f"{CLINIC}/clinic.yaml"))
