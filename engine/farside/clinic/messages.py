@@ -14,9 +14,7 @@ MESSAGES: Final[Mapping[str, str]] = {
     "mode-unknown": 'lamp "{lamp}" has no mode "{mode}"; it has {known}',
     "mode-twice": 'two modes are called "{mode}"',
     "share-sum": "the shares of a mode's bands add up to {sum}; they must add up to 1, within 0.02",
-    "beam-readings": (
-        "no beam gives these readings: they need two or more distances, falling, within what a tip of {tip} mm can do"
-    ),
+    "beam-readings": "no beam gives these readings: the farthest from the tip must be lower than the nearest",
     "initiators-absorb-more": (
         "the initiators alone absorb {initiators} /mm at {at_nm} nm, more than the measured total of {total} /mm"
     ),

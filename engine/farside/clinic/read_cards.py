@@ -103,11 +103,11 @@ def _beam(document: Document, data: Mapping[str, Any]) -> Beam:
         return Beam(float(beam["spread_exponent"]), provenance(beam["provenance"]))
     distances = [float(entry["distance_mm"]) for entry in beam["readings"]]
     irradiances = [float(entry["irradiance_mw_cm2"]) for entry in beam["readings"]]
-    tip_mm = float(data["tip_diameter_mm"])
-    try:
-        exponent = fitted_spread_exponent(distances, irradiances, tip_mm)
-    except ValueError:
-        refuse(document, "beam-readings", ("beam", "readings"), tip=f"{tip_mm:g}")
+    by_distance = sorted(zip(distances, irradiances, strict=True))
+    (nearest_mm, strongest), (farthest_mm, weakest) = by_distance[0], by_distance[-1]
+    if nearest_mm == farthest_mm or weakest >= strongest:
+        refuse(document, "beam-readings", ("beam", "readings"))
+    exponent = fitted_spread_exponent(distances, irradiances, float(data["tip_diameter_mm"]))
     return Beam(exponent, provenance(beam["provenance"]))
 
 
