@@ -5,21 +5,11 @@ from dataclasses import dataclass
 from typing import Any, Final
 
 from farside import shipped
+from farside.protocol.fields import SCHEMAS
 from farside.protocol.rule import Rule, judged
 from farside.reading.defaults import default_at
 
 NOT_APPLIED: Final = "not-applied"
-
-# Where the schema of a field's first word stands: of a card as a whole, or of a part of the plan's.
-_SCHEMAS: Final[Mapping[str, str]] = {
-    "plan": "urn:farside:schema:plan:1",
-    "lamp": "urn:farside:schema:lamp:1",
-    "composite": "urn:farside:schema:composite:1",
-    "adhesive": "urn:farside:schema:adhesive:1",
-    "liner": "urn:farside:schema:liner:1",
-    "increment": "urn:farside:schema:plan:1#/$defs/increment",
-    "exposure": "urn:farside:schema:plan:1#/$defs/exposure",
-}
 
 
 @dataclass(frozen=True, slots=True)
@@ -40,7 +30,7 @@ class Given:
         if isinstance(held := self.values.get(above), Mapping):
             return held.get(key)
         head, *path = name.split(".")
-        return default_at(path, shipped.referred(_SCHEMAS[head]), shipped.referred) if path else None
+        return default_at(path, shipped.referred(SCHEMAS[head]), shipped.referred) if path else None
 
 
 def outcome(rule: Rule, given: Mapping[str, Any]) -> str:

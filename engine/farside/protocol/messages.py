@@ -29,10 +29,11 @@ MESSAGES: Final[Mapping[str, str]] = {
         "Clear never means that it has set."
     ),
     "rule-name-unknown": 'a condition uses "{name}", which is no quantity or field of {about}',
-    "rule-name-near": 'a condition uses "{name}", which is no quantity of {about}; did you mean "{near}"?',
+    "rule-name-near": 'a condition uses "{name}", which is no quantity or field of {about}; did you mean "{near}"?',
     "rule-limit-unknown": 'a condition uses the limit "{name}", which the rule does not have',
     "rule-word-unknown": 'the words use "{{{name}}}", which is no quantity, limit or field here',
-    "rule-levels-order": "levels run from the worst finding down; {later} stands below {earlier}",
+    "rule-value-unknown": "{name} is never {value}; it is one of {known}",
+    "rule-levels-order": "levels run from the worst finding down; {worse} stands below {milder}",
 }
 
 INPUTS: Final[Mapping[str, str]] = {
