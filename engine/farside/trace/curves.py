@@ -8,7 +8,7 @@ from typing import Final
 
 from farside.clinic.lamp import Band
 from farside.clinic.optics import known_initiators
-from farside.physics.light.bands import band_nodes
+from farside.physics.light.bands import band_nodes, nodes_needed
 from farside.physics.light.edge import smoothing_length_mm
 from farside.physics.light.initiators import dose_weight
 from farside.physics.light.paste import Paste, absorption_at, scattering_at
@@ -19,9 +19,8 @@ DEEPEST_MM: Final = 20.0
 VIOLET_BELOW_NM: Final = 430.0
 
 _TO_J: Final = 1e-3
-_NODES: Final = 3
-_NODES_WHERE_STEEP: Final = 5
-_STEEP_FROM_WIDTH_NM: Final = 25.0
+# An initiator that peaks below this meets every lamp on the steep flank of its absorption: the acylphosphine oxides.
+_FLANK_BELOW_NM: Final = 390.0
 _COUNT: Final = round(DEEPEST_MM / STEP_MM) + 1
 
 Nodes = tuple[tuple[float, float], ...]
@@ -83,17 +82,13 @@ def paste_light(paste: Paste, bands: tuple[Band, ...]) -> PasteLight:
 
 
 def light_nodes(bands: Iterable[Band], paste: Paste) -> Nodes:
-    """Wavelengths and shares that stand for some bands where a paste takes them up.
-
-    Three a band, and five where an initiator that peaks below `VIOLET_BELOW_NM` meets a band wider than 25 nm: there
-    its absorption bends within the band.
-    """
-    violet = any(initiator.peak_nm < VIOLET_BELOW_NM for initiator, _ in paste.parts)
-    found: list[tuple[float, float]] = []
-    for band in bands:
-        count = _NODES_WHERE_STEEP if violet and band.width_nm > _STEEP_FROM_WIDTH_NM else _NODES
-        found.extend(band_nodes(band.peak_nm, band.width_nm, band.share, count))
-    return tuple(found)
+    """Wavelengths and shares that stand for some bands where a paste takes them up."""
+    on_flank = any(initiator.peak_nm < _FLANK_BELOW_NM for initiator, _ in paste.parts)
+    return tuple(
+        node
+        for band in bands
+        for node in band_nodes(band.peak_nm, band.width_nm, band.share, nodes_needed(band.width_nm, on_flank))
+    )
 
 
 @lru_cache(maxsize=256)

@@ -90,6 +90,6 @@ def day_limit_s(weighted_radiance_w_m2_sr: float) -> float:
 
     References
     ----------
-    ICNIRP, Health Phys 2013;105:74, extended source.
+    ICNIRP 2013, extended source.
     """
     return DAY_LIMIT_J_M2_SR / weighted_radiance_w_m2_sr if weighted_radiance_w_m2_sr > 0.0 else math.inf

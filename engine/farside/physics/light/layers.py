@@ -53,7 +53,7 @@ def delta_scaled(absorption_per_mm: float, reduced_scattering_per_mm: float, ani
 
     References
     ----------
-    Wiscombe, J Atmos Sci 1977;34:1408, delta-M (from memory).
+    Wiscombe's delta-M method (J Atmos Sci, volume 34), cited as `iadpython` 0.5 cites it in `redistribution.py`.
     """
     scattering_per_mm = reduced_scattering_per_mm / (1.0 - anisotropy)
     peak = anisotropy**STREAM_COUNT
@@ -77,7 +77,8 @@ def layer(thickness_mm: float, medium: Medium, along: Streams) -> Layer:
 
     References
     ----------
-    Prahl, The adding-doubling method, in Welch and van Gemert 1995 (from memory).
+    Van de Hulst's adding-doubling, with Fresnel's reflection at the faces as Prahl et al. added it (Appl Opt
+    1993;32:559, cited as its own program's page cites it). The diamond start is the classical one.
     """
     depth = thickness_mm * medium.extinction_per_mm
     doublings = 0

@@ -117,8 +117,8 @@ def diffuse_reflected(refractive_index: float) -> float:
 
     References
     ----------
-    Fresnel's reflection integrated over the hemisphere: Walsh 1926, as colorimetry gives it (from memory; checked
-    against numerical integration).
+    Fresnel's reflection integrated over the hemisphere, in Walsh's closed form as `iadpython` 0.5 has it in
+    `fresnel.py`; checked against numerical integration.
     """
     n = refractive_index
     square, fourth = n**2, n**4
