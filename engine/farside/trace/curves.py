@@ -1,6 +1,7 @@
 """Dose by depth in a composite under one light: made once for each pair, then kept."""
 
 import math
+import sys
 from collections.abc import Iterable
 from dataclasses import dataclass
 from functools import lru_cache
@@ -19,6 +20,8 @@ DEEPEST_MM: Final = 20.0
 VIOLET_BELOW_NM: Final = 430.0
 
 _TO_J: Final = 1e-3
+# What a strong absorber leaves at 20 mm can be less than a double holds; its logarithm must still stand in the table.
+_FAINTEST: Final = sys.float_info.min
 # An initiator that peaks below this meets every lamp on the steep flank of its absorption: the acylphosphine oxides.
 _FLANK_BELOW_NM: Final = 390.0
 _COUNT: Final = round(DEEPEST_MM / STEP_MM) + 1
@@ -101,9 +104,9 @@ def dose_curve(paste: Paste, nodes: Nodes) -> DoseCurve | None:
             optics = absorption_at(paste, wavelength), scattering_at(paste, wavelength)
             table = fluence_table(*optics, paste.refractive_index)
             sums = [total + weight * fluence for total, fluence in zip(sums, table, strict=True)]
-    if sums[-1] <= 0.0:
+    if sums[0] <= 0.0:
         return None
-    return DoseCurve(tuple(map(math.log, sums)))
+    return DoseCurve(tuple(math.log(max(total, _FAINTEST)) for total in sums))
 
 
 @lru_cache(maxsize=256)
