@@ -1,12 +1,9 @@
 """Finding cards: by kind and id, in folders or given as data."""
 
-import os
-
 import pytest
 from farside.clinic.cards import Cards, card_documents, card_folders, documents_of
 from farside.reading.document import Document
 from farside.reading.problems import Refused
-
 from unit.made import COMPOSITE, LAMP, PLAN, edited, read
 
 LAMP_TEXT = """\
@@ -85,8 +82,8 @@ def test_a_file_reached_by_two_ways_is_one_card(tmp_path):
     write(tmp_path / "lamps", "a.yaml")
     (tmp_path / "plans").mkdir()
     plan = tmp_path / "plans" / "plan.yaml"
-    os.symlink(tmp_path / "lamps" / "a.yaml", tmp_path / "lamps" / "again.yaml")
-    os.symlink(tmp_path / "lamps", tmp_path / "linked")
+    (tmp_path / "lamps" / "again.yaml").symlink_to(tmp_path / "lamps" / "a.yaml")
+    (tmp_path / "linked").symlink_to(tmp_path / "lamps")
     documents = card_documents(card_folders(plan, [tmp_path / "lamps", tmp_path / "linked"]))
     assert len(documents) == 1
     assert Cards(documents).lamp("lamp", asked(), ()).id == "lamp"

@@ -11,7 +11,6 @@ from farside.physics.light.paste import absorption_at
 from farside.physics.light.transport import slab
 from farside.reading.document import Document, read_document
 from farside.reading.problems import Refused
-
 from unit.made import ADHESIVE, COMPOSITE, LAMP, edited
 
 
@@ -58,7 +57,7 @@ def test_the_bands_of_a_mode_add_up_to_its_light(shares, fine):
     if fine:
         assert len(lamp(**{"modes/0/bands": bands}).modes[0].bands) == 2
     else:
-        with pytest.raises(Refused, match="add up to 0.9; they must add up to 1"):
+        with pytest.raises(Refused, match=r"add up to 0\.9; they must add up to 1"):
             lamp(**{"modes/0/bands": bands})
 
 
@@ -137,7 +136,7 @@ def test_the_cards_absorption_is_the_total_at_its_wavelength():
 
 
 def test_the_worst_initiator_speaks_for_all():
-    other = sorted(known_initiators().keys() - {"camphorquinone"})[0]
+    other = min(known_initiators().keys() - {"camphorquinone"})
     second = {"what": other, "weight_share_of_resin": 0.001, "provenance": "assumed"}
     assert composite().initiators_provenance == "maker"
     assert composite({"initiators": [COMPOSITE["initiators"][0], second]}).initiators_provenance == "assumed"
@@ -183,7 +182,7 @@ def test_a_transmittance_is_turned_back_into_the_absorption_that_gives_it(absorp
 
 
 def test_a_transmittance_that_no_paste_has_is_refused_at_its_place():
-    with pytest.raises(Refused, match="no paste lets 0.99 of the light through 4 mm") as refused:
+    with pytest.raises(Refused, match=r"no paste lets 0\.99 of the light through 4 mm") as refused:
         composite({"optics": {"transmittance_share": 0.99, "at_mm": 4.0, "provenance": "measured"}})
     assert refused.value.problems[0].path == ("optics", "transmittance_share")
 

@@ -4,7 +4,6 @@ from datetime import date
 
 import pytest
 from farside.reading.problems import Refused
-
 from unit.made import ADHESIVE, CARDS, COMPOSITE, PLAN, edited, read
 
 

@@ -4,7 +4,6 @@ import pytest
 from farside.clinic.usual import with_usual
 from farside.reading.document import Document
 from farside.reading.problems import Refused
-
 from unit.made import PLAN, edited, read
 
 
