@@ -11,17 +11,22 @@ interface IncrementsProps {
 }
 
 export function Increments({ drawing, scale, selected, onSelect }: IncrementsProps) {
-  const order = drawing.increments.map((increment, index) => ({ increment, index })).sort((a, b) => Number(a.index === selected) - Number(b.index === selected));
+  const chosen = drawing.increments[selected];
   return (
     <g>
-      {order.map(({ increment, index }) => (
+      {drawing.increments.map((increment, index) => (
         <One
           key={increment.number} increment={increment} scale={scale} width={drawing.cavity.width_mm}
           chosen={index === selected} onSelect={() => onSelect(index)}
         />
       ))}
+      {chosen !== undefined && <rect class="chosen-edge" {...boxOf(chosen, scale, drawing.cavity.width_mm)} />}
     </g>
   );
+}
+
+function boxOf({ top_mm: top, bottom_mm: bottom }: DrawnIncrement, scale: Scale, width: number) {
+  return { x: scale.x(-width / 2), y: scale.y(top), width: width * scale.perMm, height: (bottom - top) * scale.perMm };
 }
 
 interface OneProps {
@@ -34,13 +39,13 @@ interface OneProps {
 
 function One({ increment, scale, width, chosen, onSelect }: OneProps) {
   const { number, top_mm: top, bottom_mm: bottom, short_from_mm: short, finding } = increment;
-  const box = { x: scale.x(-width / 2), y: scale.y(top), width: width * scale.perMm, height: (bottom - top) * scale.perMm };
+  const box = boxOf(increment, scale, width);
   const mark = words.marks[finding];
   const label = increment.far_shown === null ? words.section.pickUnknown(number, mark) : words.section.pick(number, increment.far_shown, mark);
   const radius = Math.min(11, Math.max(7, box.height / 2 - 1));
   return (
     <g
-      class={chosen ? "increment chosen" : "increment"} role="button" tabIndex={0} aria-pressed={chosen} aria-label={label} data-number={number}
+      class="increment" role="button" tabindex={0} aria-pressed={chosen} aria-label={label} data-number={number}
       onClick={onSelect}
       onKeyDown={(event) => {
         if (event.key !== "Enter" && event.key !== " ") return;
