@@ -7,11 +7,13 @@ reach of the model, and the fluence rate within 2 %; four directions would leave
 
 from collections.abc import Sequence
 from operator import mul
-from typing import NamedTuple
+from typing import Final, NamedTuple
 
 from farside.physics.light.layers import Layer, delta_scaled, endless, layer
 from farside.physics.light.matrix import Matrix, Vector, applied, identity_less, product, solved, total
 from farside.physics.light.streams import Streams, streams
+
+_DOUBLINGS_OF_LEAP: Final = 5
 
 
 class Slab(NamedTuple):
@@ -148,11 +150,16 @@ def half_space_fluence(
     onward = _onward(step, below)
     gathering = _gathering(below, along)
     down = _lit_from_above(below, along, _beam(along))
+    # What each of the next depths gathers from the light here; then one leap carries the light past them all.
+    rows, leap = [gathering], onward
+    for _ in range(_DOUBLINGS_OF_LEAP):
+        rows += product(rows, leap)
+        leap = product(leap, leap)
     table: list[float] = []
-    for _ in range(count):
-        table.append(sum(map(mul, gathering, down)))
-        down = applied(onward, down)
-    return table
+    while len(table) < count:
+        table += applied(rows, down)
+        down = applied(leap, down)
+    return table[:count]
 
 
 def _beam(along: Streams) -> Vector:
