@@ -2,6 +2,7 @@
 
 from collections.abc import Mapping
 from datetime import date
+from functools import cache
 from pathlib import Path as File
 from typing import Any, Final, NoReturn
 
@@ -11,7 +12,7 @@ from farside.reading.characters import LARGEST
 from farside.reading.defaults import with_defaults
 from farside.reading.document import Document, read_document
 from farside.reading.problems import Refused
-from farside.reading.schema import check_schema, nearest
+from farside.reading.schema import Validator, check_by, nearest, validator_of
 
 KINDS: Final = ("plan", "lamp", "composite", "adhesive", "liner", "clinic", "rule", "protocol")
 
@@ -55,8 +56,13 @@ def checked(document: Document, wanted: str | None = None) -> Document:
     kind = kind_of(document)
     if wanted not in {None, kind}:
         refuse(document, "kind-other", ("kind",), found=kind, wanted=wanted)
-    check_schema(document, shipped.schema(kind), tuple(shipped.schemas().values()))
+    check_by(_validator(kind), document)
     return document
+
+
+@cache
+def _validator(kind: str) -> Validator:
+    return validator_of(shipped.whole_schema(kind), shipped.schemas().values())
 
 
 def read_file(file: File) -> Document:
@@ -75,7 +81,7 @@ def read_file(file: File) -> Document:
 
 def filled(data: Mapping[str, Any], kind: str) -> dict[str, Any]:
     """Data of a kind with that kind's defaults filled in."""
-    return dict(with_defaults(data, shipped.schema(kind), shipped.referred))
+    return dict(with_defaults(data, shipped.whole_schema(kind), shipped.referred))
 
 
 def day(text: str | None) -> date | None:

@@ -12,9 +12,10 @@ from .nearest import nearest
 from .problems import Refused
 from .schema_errors import problems_of
 
-__all__ = ["check_schema", "nearest"]
+__all__ = ["check_by", "check_schema", "nearest", "validator_of"]
 
 Schema = Mapping[str, Any]
+Validator = Any
 
 MOST_PROBLEMS: Final = 50
 MOST_ERRORS: Final = 500
@@ -37,13 +38,18 @@ def check_schema(document: Document, schema: Schema, others: Iterable[Schema] = 
     Refused
         With each problem at its place, in the order of the file, at most 50.
     """
-    validator = _validator(schema, tuple(others))
+    check_by(validator_of(schema, others), document)
+
+
+def check_by(validator: Validator, document: Document) -> None:
+    """Lets a document pass that keeps to a schema made ready by `validator_of`; as `check_schema` in all else."""
     problems = problems_of(document, islice(validator.iter_errors(document.data), MOST_ERRORS))
     if problems:
         raise Refused(problems[:MOST_PROBLEMS])
 
 
-def _validator(schema: Schema, others: tuple[Schema, ...]) -> Any:
+def validator_of(schema: Schema, others: Iterable[Schema] = ()) -> Validator:
+    """A schema made ready to check by, worth keeping where many documents keep to one schema."""
     from referencing import Registry
     from referencing.jsonschema import DRAFT202012
 
