@@ -10,7 +10,7 @@ from farside.clinic.read_plan import read_plan
 from farside.protocol.findings import Finding, finding_of, sorted_findings
 from farside.protocol.protocol import Protocol, base_protocol
 from farside.protocol.report import Report
-from farside.quantities.subject import subjects
+from farside.quantities.subject import ABOUT, subjects
 from farside.quantities.values import Valued
 from farside.reading.document import Document
 from farside.trace.light import trace_light
@@ -63,10 +63,11 @@ def report_on(plan: Plan, protocol: Protocol) -> Report:
     """The report on a plan that has been read."""
     trace = trace_light(plan)
     valued = Valued(trace)
+    judged = {about: [valued.of(subject) for subject in subjects(trace, about)] for about in ABOUT}
     found: list[Finding] = []
     not_applied: list[str] = []
     for rule in protocol.rules:
-        outcomes = [finding_of(rule, valued.of(subject)) for subject in subjects(trace, rule.about)]
+        outcomes = [finding_of(rule, values) for values in judged[rule.about]]
         applied = [finding for finding in outcomes if finding is not None]
         found.extend(applied)
         if not applied:

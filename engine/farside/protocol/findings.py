@@ -187,8 +187,9 @@ def _measured(rule: Rule, outcome: Outcome, values: SubjectValues) -> Measured |
 def _held_against(rule: Rule, values: SubjectValues) -> dict[str, dict[str, tuple[float, Grade, str]]]:
     """By quantity, the limits that it is held against, each with its value, finding and side, worst first."""
     found: dict[str, dict[str, tuple[float, Grade, str]]] = {}
+    values_of_limits = rule.values_of_limits()
     for level in rule.levels:
-        for test in level.when.live(values, rule.values_of_limits()):
+        for test in level.when.live(values, values_of_limits):
             operand = test.operands[0]
             if test.how in _SIDES and operand.sort == "limit" and _is_number(rule.limits[operand.of].value):
                 entry = (float(rule.limits[operand.of].value), level.finding, test.how)

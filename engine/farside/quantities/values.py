@@ -49,13 +49,13 @@ class SubjectValues:
     def __init__(self, subject: Subject, valued: Valued) -> None:
         self.subject = subject
         self._valued = valued
+        self._held: dict[str, Any] = {}
 
     def get(self, name: str) -> Any:
         """The value of that name; None where it is missing."""
-        if self.quantity(name) is None:
-            return self.subject.field(name)
-        outcome = self.found(name)
-        return outcome.value if isinstance(outcome, Found) else None
+        if name not in self._held:
+            self._held[name] = self._taken(name)
+        return self._held[name]
 
     def quantity(self, name: str) -> Quantity | None:
         """The quantity of that name which this subject sees; None for a field."""
@@ -72,3 +72,9 @@ class SubjectValues:
         quantity = visible(self.subject.about)[name]
         owner = self.subject.enclosing(quantity.about)
         return NotHad((), ()) if owner is None else self._valued.found(quantity, owner)
+
+    def _taken(self, name: str) -> Any:
+        if self.quantity(name) is None:
+            return self.subject.field(name)
+        outcome = self.found(name)
+        return outcome.value if isinstance(outcome, Found) else None
