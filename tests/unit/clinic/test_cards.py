@@ -120,6 +120,7 @@ def test_an_unreadable_file_in_a_card_folder_is_refused_at_its_place(tmp_path):
     assert place.line >= 2
 
 
+@pytest.mark.outside_browser
 def test_a_huge_file_is_refused_without_being_read_whole(tmp_path):
     with (tmp_path / "huge.json").open("wb") as file:
         file.truncate(2**33)  # sparse: 8 GB that no machine here would hold
