@@ -6,8 +6,6 @@ from datetime import date
 from functools import lru_cache
 from typing import Any, Final
 
-import yaml
-
 from farside import shipped
 from farside.check import check
 from farside.clinic.cards import Cards, documents_of
@@ -89,6 +87,8 @@ def _read(request: Mapping[str, Any]) -> dict[str, Any]:
 
 
 def _write(request: Mapping[str, Any]) -> dict[str, Any]:
+    import yaml  # slow to import, and the page saves nothing to start
+
     text = yaml.safe_dump(request["data"], sort_keys=False, allow_unicode=True, width=100)
     return {"ok": True, "text": text}
 
