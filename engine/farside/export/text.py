@@ -63,11 +63,16 @@ def _finding(finding: Finding) -> Iterator[str]:
 
 def _labelled(grade: str, words: str) -> str:
     head = f"{MARKS[grade]} {text(f'grade-{grade}')}".ljust(_INDENT)
-    return "\n".join(wrap(words, _WIDTH, initial_indent=head, subsequent_indent=" " * _INDENT))
+    return "\n".join(_wrapped(words, head))
 
 
 def _indented(words: str) -> Iterable[str]:
-    return wrap(words, _WIDTH, initial_indent=" " * _INDENT, subsequent_indent=" " * _INDENT)
+    return _wrapped(words, " " * _INDENT)
+
+
+def _wrapped(words: str, head: str) -> list[str]:
+    """Lines under a head; a rule's id stays whole, so that it can be searched for."""
+    return wrap(words, _WIDTH, initial_indent=head, subsequent_indent=" " * _INDENT, break_on_hyphens=False)
 
 
 def _once(findings: Iterable[Finding]) -> Iterator[Finding]:

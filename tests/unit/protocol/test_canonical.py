@@ -68,7 +68,11 @@ RULE = {
 }  # fmt: skip
 
 
-def digest_with(edit=len, **head):
+def as_it_is(_rule):
+    pass
+
+
+def digest_with(edit=as_it_is, **head):
     rule = copy.deepcopy(RULE)
     edit(rule)
     return protocol_of({**HEAD, **head}, (rule_of(rule, "plan"),)).digest
