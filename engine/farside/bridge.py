@@ -11,6 +11,7 @@ from farside.check import check
 from farside.clinic.cards import Cards, documents_of
 from farside.clinic.reading import checked
 from farside.export.drawing import as_drawing
+from farside.export.yaml_file import as_yaml
 from farside.protocol.protocol import base_protocol
 from farside.protocol.wording import said
 from farside.reading.document import Document, read_document
@@ -87,10 +88,7 @@ def _read(request: Mapping[str, Any]) -> dict[str, Any]:
 
 
 def _write(request: Mapping[str, Any]) -> dict[str, Any]:
-    import yaml  # slow to import, and the page saves nothing to start
-
-    text = yaml.safe_dump(request["data"], sort_keys=False, allow_unicode=True, width=100)
-    return {"ok": True, "text": text}
+    return {"ok": True, "text": as_yaml(request["data"])}
 
 
 def _problem(problem: Problem) -> dict[str, Any]:
