@@ -8,22 +8,24 @@ from typing import Final
 from farside.export.messages import MARKS, text
 from farside.protocol.findings import Finding, Measured
 from farside.protocol.report import Report
+from farside.reading.problems import printable
 
 _WIDTH: Final = 100
 _INDENT: Final = 10
+_LONGEST: Final = 400
 _SHOWN_DIGITS: Final = 8
 # Said once a plan, however many increments they touch.
 _ONCE: Final = frozenset({"assumed-optics"})
 
 
 def as_text(report: Report) -> str:
-    """A report as text, ending in a line break."""
+    """A report as text, ending in a line break; what turns the direction of writing in a title is shown as its code."""
     lines = [_head(report), "", f"{MARKS[report.verdict]} {report.verdict_says()}", ""]
     for finding in _once(report.findings):
         if finding.finding != "clear":
             lines += [*_finding(finding), ""]
     lines += [_labelled("clear", report.clear_says()), "", *wrap(text("caution"), _WIDTH)]
-    return "\n".join(lines) + "\n"
+    return "".join(f"{printable(line, _LONGEST)}\n" for line in lines)
 
 
 def _head(report: Report) -> str:
