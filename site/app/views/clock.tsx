@@ -30,7 +30,7 @@ function Line({ drawing, width }: { readonly drawing: Drawing; readonly width: n
       {layersOf(drawing.clock).map(({ label, start, end }) => (
         <g key={start}>
           <path class="bracket" d={`M${x(start) + 1} ${TOP - 3}v-3H${x(end) - 1}v3`} />
-          {x(end) - x(start) > label.length * 7 && <text x={(x(start) + x(end)) / 2} y={LABELS - 2} text-anchor="middle">{label}</text>}
+          {x(end) - x(start) > label.length * 8 && <text x={(x(start) + x(end)) / 2} y={LABELS - 2} text-anchor="middle">{label}</text>}
         </g>
       ))}
       {drawing.clock.map((step) => <Step key={`${step.start_s}-${step.what}`} step={step} from={x(step.start_s)} to={x(step.start_s + step.length_s)} />)}

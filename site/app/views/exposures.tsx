@@ -22,7 +22,7 @@ export function Exposures({ state, send, path, firstShown = false }: ExposuresPr
       {list.map((exposure, index) => (
         <section key={index} class="exposure" aria-label={words.exposure.title(index + 1)}>
           <div class="exposure-head">
-            <h4>{words.exposure.title(index + 1)}</h4>
+            <h3>{words.exposure.title(index + 1)}</h3>
             <button type="button" class="quiet" aria-label={words.exposure.remove(index + 1)} onClick={() => put(list.filter((__, each) => each !== index))}>
               {words.increment.remove}
             </button>
@@ -48,7 +48,7 @@ function Through({ state, send, path }: ExposuresProps) {
   const put = (next: readonly Data[]) => send({ is: "edit", path, value: next.length === 0 ? undefined : next });
   return (
     <div class="through">
-      {layers.length > 0 && <h5>{words.exposure.through}</h5>}
+      {layers.length > 0 && <h4>{words.exposure.through}</h4>}
       {layers.map((_, index) => (
         <div key={index} class="fields">
           {THROUGH.map((field) => <FieldView key={field.name} state={state} send={send} under={[...path, index]} field={field} />)}

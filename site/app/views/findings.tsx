@@ -6,6 +6,9 @@ import { words } from "../words/index";
 import { MarkShape, MarkWord } from "./mark";
 import { Ruler } from "./ruler";
 
+/** How many sentences of one rule are shown below its first. */
+const FEW = 3;
+
 export function Findings({ state, stale }: { readonly state: State; readonly stale: boolean }) {
   const refused = state.refused?.plan === state.plan ? state.refused.problems : null;
   const report = state.answered?.report;
@@ -58,7 +61,7 @@ function One({ group, pages }: { readonly group: Group; readonly pages: (rule: s
     <article class={`finding ${mark}`}>
       <MarkWord mark={mark} />
       <div class="told">
-        {distinct(findings.map((finding) => finding.says)).map((says, index) => (index === 0 ? <h3 key={says}>{says}</h3> : <p key={says} class="says">{says}</p>))}
+        <Sayings says={distinct(findings.map((finding) => finding.says))} />
         {missing.length > 0 && <p class="missing">{words.findings.missing(missing)}</p>}
         <Ruler findings={findings} />
         {distinct(findings.map((finding) => finding.do)).map((text) => <p key={text} class="do">{text}</p>)}
@@ -67,6 +70,23 @@ function One({ group, pages }: { readonly group: Group; readonly pages: (rule: s
         <Grounds finding={first} page={page} />
       </div>
     </article>
+  );
+}
+
+/** What each of a group says; of many, those past the first few are folded, and the fold says how many. */
+function Sayings({ says: [first, ...others] }: { readonly says: readonly string[] }) {
+  const folded = others.length > FEW ? others.slice(FEW) : [];
+  return (
+    <>
+      <h3>{first}</h3>
+      {others.slice(0, FEW).map((says) => <p key={says} class="says">{says}</p>)}
+      {folded.length > 0 && (
+        <details>
+          <summary>{words.findings.more(folded.length)}</summary>
+          {folded.map((says) => <p key={says} class="says">{says}</p>)}
+        </details>
+      )}
+    </>
   );
 }
 
@@ -85,6 +105,7 @@ function Grounds({ finding, page }: { readonly finding: Finding; readonly page: 
 /** "rueggeberg-1994" as it is read aloud. */
 function cited(source: string): string {
   const [name = "", ...rest] = source.split("-");
+  if (words.findings.bodies.includes(name)) return [name.toUpperCase(), ...rest].join(" ");
   return [name.charAt(0).toUpperCase() + name.slice(1), ...rest].join(" ");
 }
 

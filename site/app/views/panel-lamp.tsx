@@ -54,7 +54,7 @@ function Readings({ lamp }: { readonly lamp: Card }) {
   return (
     <div class="card-facts">
       <p>{words.lamp.tip(String(lamp["tip_diameter_mm"]))}</p>
-      {rows.length > 0 && <h4>{words.lamp.readings}</h4>}
+      {rows.length > 0 && <h3>{words.lamp.readings}</h3>}
       <ul>
         {rows.map((row, index) => (
           <li key={index}>{String(row["on"])}: {words.header.reading(String(row["radiant_exitance_mw_cm2"]))}, {String(row["mode"])}</li>

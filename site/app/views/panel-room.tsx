@@ -16,7 +16,7 @@ export function RoomPanel({ state, send }: Part) {
   return (
     <>
       <section aria-label={words.room.sources}>
-        <h4>{words.room.sources}</h4>
+        <h3>{words.room.sources}</h3>
         {sources.map((_, index) => (
           <div key={index} class="fields">
             {SOURCE.map((field) => <FieldView key={field.name} state={state} send={send} under={[...SOURCES, index]} field={field} />)}
@@ -26,7 +26,7 @@ export function RoomPanel({ state, send }: Part) {
         <button type="button" onClick={() => put([...sources, { what: first, illuminance_lx: 8000, filter: "none" }])}>{words.room.add}</button>
       </section>
       <section aria-label={words.room.team}>
-        <h4>{words.room.team}</h4>
+        <h3>{words.room.team}</h3>
         <p class="hint">{words.room.yesNoOnly}</p>
         <div class="fields">
           {TEAM.map((field) => <FieldView key={field.name} state={state} send={send} under={["team"]} field={field} />)}

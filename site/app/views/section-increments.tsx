@@ -3,6 +3,9 @@ import type { DrawnIncrement, Drawing } from "../types";
 import { words } from "../words/index";
 import { inkOf, type Scale } from "./section-scale";
 
+/** From what height on an increment has room for its number in a ring, and for the number alone. */
+const [BALLOON, LETTER] = [24, 13];
+
 interface IncrementsProps {
   readonly drawing: Drawing;
   readonly scale: Scale;
@@ -42,7 +45,7 @@ function One({ increment, scale, width, chosen, onSelect }: OneProps) {
   const box = boxOf(increment, scale, width);
   const mark = words.marks[finding];
   const label = increment.far_shown === null ? words.section.pickUnknown(number, mark) : words.section.pick(number, increment.far_shown, mark);
-  const radius = Math.min(11, Math.max(7, box.height / 2 - 1));
+  const middle = box.y + box.height / 2;
   return (
     <g
       class="increment" role="button" tabindex={0} aria-pressed={chosen} aria-label={label} data-number={number}
@@ -58,8 +61,8 @@ function One({ increment, scale, width, chosen, onSelect }: OneProps) {
       <rect {...box} fill={`url(#ink-${number})`} />
       {short !== null && <rect x={box.x} y={scale.y(top + short)} width={box.width} height={Math.max(0, scale.y(bottom) - scale.y(top + short))} fill="url(#hatch)" />}
       <rect class="increment-edge" {...box} />
-      <circle class="balloon" cx={box.x + radius + 5} cy={box.y + box.height / 2} r={radius} />
-      <text class="balloon-word" x={box.x + radius + 5} y={box.y + box.height / 2 + 5} text-anchor="middle">{number}</text>
+      {box.height >= BALLOON && <circle class="balloon" cx={box.x + 16} cy={middle} r={11} />}
+      {(box.height >= LETTER || chosen) && <text class="balloon-word" x={box.x + 16} y={middle + 5} text-anchor="middle">{number}</text>}
     </g>
   );
 }

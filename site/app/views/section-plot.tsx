@@ -8,6 +8,9 @@ import { shareAxis, type Scale } from "./section-scale";
 /** Short forms, so that the axis has room. */
 const FRACTIONS: Readonly<Record<number, string>> = { 0.5: "½", 0.25: "¼", 0.125: "⅛", 0.0625: "1⁄16" };
 
+/** The height that a figure needs; in thinner increments only the chosen one has it. */
+const LINE = 17;
+
 interface PlotProps {
   readonly drawing: Drawing;
   readonly scale: Scale;
@@ -53,6 +56,7 @@ function Curve({ increment, scale, at, wall, chosen }: CurveProps) {
   const { top_mm: top, bottom_mm: bottom, profile, far_share: far, far_shown: shown, short_from_mm: short, finding } = increment;
   const y = scale.y(bottom);
   const points = profile.map(([depth, share]) => `${at(share).toFixed(1)} ${scale.y(top + depth).toFixed(1)}`);
+  const roomy = (bottom - top) * scale.perMm >= LINE || chosen;
   const lacking = far !== null && far < 1;
   const lack = profile.filter(([depth]) => short !== null && depth >= short).map(([depth, share]) => `${at(share).toFixed(1)} ${scale.y(top + depth).toFixed(1)}`);
   return (
@@ -63,8 +67,8 @@ function Curve({ increment, scale, at, wall, chosen }: CurveProps) {
       )}
       {points.length > 1 && <path class="curve-line" d={`M${points.join("L")}`} />}
       {far !== null && <circle class={lacking ? "far stop" : "far"} cx={at(far)} cy={y} r="4" />}
-      <text class={lacking ? "far-word stop" : "far-word"} x={scale.plotLeft - 8} y={y - 5} text-anchor="end">{shown ?? "–"}</text>
-      <MarkAt mark={finding} x={scale.toothRight + 9} y={y - 10} />
+      {roomy && <text class={lacking ? "far-word stop" : "far-word"} x={scale.plotLeft - 8} y={y - 5} text-anchor="end">{shown ?? "–"}</text>}
+      {roomy && <MarkAt mark={finding} x={scale.toothRight + 9} y={y - 10} />}
     </g>
   );
 }

@@ -209,6 +209,9 @@ export const en = {
   findings: {
     title: "Findings, worst first",
     none: "No findings yet.",
+    more: (n: number) => `${count(n, "more finding", "more findings")} of this rule`,
+    /** Bodies that are written in capitals. */
+    bodies: ["iso", "fdi", "icnirp", "cie"],
     measured: "Measured",
     rule: "The rule and its source",
     missing: (names: readonly string[]) => `Not known: ${names.join(", ")}`,
