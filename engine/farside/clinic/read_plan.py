@@ -3,13 +3,13 @@
 import math
 from collections.abc import Mapping
 from datetime import date
-from typing import Any, Final
+from typing import Any, Final, NoReturn
 
 from farside import shipped
 from farside.clinic.cards import Cards
 from farside.clinic.plan import Exposure, Increment, LayerUse, Plan, RoomSource
 from farside.clinic.reading import Path, checked, day, filled, refuse
-from farside.clinic.usual import with_usual
+from farside.clinic.usual import Merged, with_usual
 from farside.reading.document import Document
 from farside.reading.schema import nearest
 
@@ -49,16 +49,17 @@ def read_plan(document: Document, cards: Cards, clinic: Document | None = None, 
     if clinic is not None:
         checked(clinic, "clinic")
     data = filled(with_usual(document, clinic), "plan")
-    _refuse_missing(document, data)
-    lamp = cards.lamp(data["lamp"]["card"], document, ("lamp", "card"))
+    merged = Merged(document, clinic)
+    _refuse_missing(merged, data)
+    lamp = cards.lamp(data["lamp"]["card"], *merged.giver(("lamp", "card")))
     mode = next((mode for mode in lamp.modes if mode.id == data["lamp"]["mode"]), None)
     if mode is None:
         known = ", ".join(mode.id for mode in lamp.modes)
-        refuse(document, "mode-unknown", ("lamp", "mode"), lamp=lamp.id, mode=data["lamp"]["mode"], known=known)
+        _refuse(merged, "mode-unknown", ("lamp", "mode"), lamp=lamp.id, mode=data["lamp"]["mode"], known=known)
     increments = tuple(
-        _increment(document, cards, entry, ("increments", index)) for index, entry in enumerate(data["increments"])
+        _increment(merged, cards, entry, ("increments", index)) for index, entry in enumerate(data["increments"])
     )
-    _refuse_unfit(document, data, increments)
+    _refuse_unfit(merged, data, increments)
     return Plan(
         title=data["title"],
         on=on or day(data.get("on")) or date.today(),
@@ -69,40 +70,46 @@ def read_plan(document: Document, cards: Cards, clinic: Document | None = None, 
         width_mm=float(data["cavity"]["width_mm"]),
         remaining_dentine_mm=_number(data["cavity"], "remaining_dentine_mm"),
         gap_mm=float(data["gap_mm"]),
-        adhesive=_layer_use(document, cards, data, "adhesive"),
-        liner=_layer_use(document, cards, data, "liner"),
-        room=_room(document, data.get("room", {}).get("sources")),
+        adhesive=_layer_use(merged, cards, data, "adhesive"),
+        liner=_layer_use(merged, cards, data, "liner"),
+        room=_room(merged, data.get("room", {}).get("sources")),
         increments=increments,
-        after=_exposures(document, data.get("after", ()), ("after",)),
+        after=_exposures(merged, data.get("after", ()), ("after",)),
         fields=data,
     )
 
 
-def _refuse_missing(document: Document, data: Mapping[str, Any]) -> None:
+def _refuse(merged: Merged, key: str, path: Path, **values: object) -> NoReturn:
+    """Refuse a value of the plan at its place in the file that gave it."""
+    document, place = merged.giver(path)
+    refuse(document, key, place, **values)
+
+
+def _refuse_missing(merged: Merged, data: Mapping[str, Any]) -> None:
     for path in _NEEDED:
         found: Any = data
         for step in path:
             found = found.get(step) if isinstance(found, Mapping) else None
         if found is None:
-            refuse(document, "missing-after-usual", path, what=".".join(path))
+            _refuse(merged, "missing-after-usual", path, what=".".join(path))
     for index, increment in enumerate(data["increments"]):
         if "composite" not in increment:
             what = f"increments[{index}].composite"
-            refuse(document, "missing-after-usual", ("increments", index, "composite"), what=what)
+            _refuse(merged, "missing-after-usual", ("increments", index, "composite"), what=what)
     for kind in _LAYERS:
         if isinstance(data.get(kind), Mapping) and "card" not in data[kind]:
-            refuse(document, "missing-after-usual", (kind, "card"), what=f"{kind}.card")
+            _refuse(merged, "missing-after-usual", (kind, "card"), what=f"{kind}.card")
 
 
-def _refuse_unfit(document: Document, data: Mapping[str, Any], increments: tuple[Increment, ...]) -> None:
+def _refuse_unfit(merged: Merged, data: Mapping[str, Any], increments: tuple[Increment, ...]) -> None:
     depth_mm = float(data["cavity"]["depth_mm"])
     tip_mm = depth_mm + float(data["gap_mm"])
     filled_mm = 0.0
     for index, increment in enumerate(increments):
         path: Path = ("increments", index, "thickness_mm")
         if increment.thickness_mm > depth_mm:
-            refuse(
-                document,
+            _refuse(
+                merged,
                 "thicker-than-cavity",
                 path,
                 what=f"increments[{index}].thickness_mm",
@@ -111,29 +118,29 @@ def _refuse_unfit(document: Document, data: Mapping[str, Any], increments: tuple
             )
         filled_mm += increment.thickness_mm
         if filled_mm > tip_mm + 1e-9:
-            refuse(document, "fills-past-tip", path, filled=f"{filled_mm:g}", tip=f"{tip_mm:g}")
+            _refuse(merged, "fills-past-tip", path, filled=f"{filled_mm:g}", tip=f"{tip_mm:g}")
 
 
-def _increment(document: Document, cards: Cards, data: Mapping[str, Any], path: Path) -> Increment:
+def _increment(merged: Merged, cards: Cards, data: Mapping[str, Any], path: Path) -> Increment:
     return Increment(
-        composite=cards.composite(data["composite"], document, (*path, "composite")),
+        composite=cards.composite(data["composite"], *merged.giver((*path, "composite"))),
         thickness_mm=float(data["thickness_mm"]),
         placing_s=_number(data, "placing_s"),
         dispensed_s=_number(data, "dispensed_s"),
-        exposures=_exposures(document, data.get("exposures", ()), (*path, "exposures")),
+        exposures=_exposures(merged, data.get("exposures", ()), (*path, "exposures")),
         fields=data,
     )
 
 
-def _layer_use(document: Document, cards: Cards, data: Mapping[str, Any], kind: str) -> LayerUse | None:
+def _layer_use(merged: Merged, cards: Cards, data: Mapping[str, Any], kind: str) -> LayerUse | None:
     use = data.get(kind)
     if use is None or use == _NOT_USED:
         return None
-    layer = cards.layer(kind, use["card"], document, (kind, "card"))
-    return LayerUse(layer, _exposures(document, use.get("exposures", ()), (kind, "exposures")))
+    layer = cards.layer(kind, use["card"], *merged.giver((kind, "card")))
+    return LayerUse(layer, _exposures(merged, use.get("exposures", ()), (kind, "exposures")))
 
 
-def _room(document: Document, sources: Any) -> tuple[RoomSource, ...] | None:
+def _room(merged: Merged, sources: Any) -> tuple[RoomSource, ...] | None:
     """The room's lights; None where the plan does not say, none at all where it is dark."""
     if sources is None:
         return None
@@ -141,21 +148,21 @@ def _room(document: Document, sources: Any) -> tuple[RoomSource, ...] | None:
     for index, light in enumerate(sources):
         what, path = light["what"], ("room", "sources", index, "what")
         if what not in known and (near := nearest(what, known)) is not None:
-            refuse(document, "light-unknown-near", path, what=what, near=near)
+            _refuse(merged, "light-unknown-near", path, what=what, near=near)
         if what not in known:
-            refuse(document, "light-unknown", path, what=what, known=", ".join(known))
+            _refuse(merged, "light-unknown", path, what=what, known=", ".join(known))
     return tuple(RoomSource(light["what"], float(light["illuminance_lx"]), light["filter"]) for light in sources)
 
 
-def _exposures(document: Document, entries: Any, path: Path) -> tuple[Exposure, ...]:
-    return tuple(_exposure(document, entry, (*path, index)) for index, entry in enumerate(entries))
+def _exposures(merged: Merged, entries: Any, path: Path) -> tuple[Exposure, ...]:
+    return tuple(_exposure(merged, entry, (*path, index)) for index, entry in enumerate(entries))
 
 
-def _exposure(document: Document, data: Mapping[str, Any], path: Path) -> Exposure:
+def _exposure(merged: Merged, data: Mapping[str, Any], path: Path) -> Exposure:
     from_side = data["from"] == "side"
     distance_mm = _number(data, "tip_distance_mm")
     if from_side and distance_mm is None:
-        refuse(document, "side-distance", path)
+        _refuse(merged, "side-distance", path)
     shares = [layer.get("transmittance_share") for layer in data["through"]]
     return Exposure(
         time_s=float(data["time_s"]),

@@ -1,10 +1,12 @@
 """The clinic's usual values under a plan that says only what differs."""
 
 import pytest
+from farside.clinic.cards import Cards, documents_of
+from farside.clinic.read_plan import read_plan
 from farside.clinic.usual import with_usual
-from farside.reading.document import Document
+from farside.reading.document import Document, read_document
 from farside.reading.problems import Refused
-from unit.made import PLAN, edited, read
+from unit.made import CARDS, PLAN, edited, read
 
 
 def clinic(**usual):
@@ -82,3 +84,38 @@ def test_a_layer_in_use_needs_a_card(layer):
 def test_what_is_no_clinic_file_is_refused_and_not_passed_over():
     with pytest.raises(Refused, match="this is a plan; a clinic is needed here"):
         read(PLAN, clinic=PLAN)
+
+
+USUAL = """\
+kind: clinic
+title: A clinic
+usual:
+  lamp: {card: lamp, mode: boost, sleeve: none}
+  adhesive: {card: nobody}
+  composite: putty
+  room: {sources: [{what: torch, illuminance_lx: 5}]}
+"""
+
+
+@pytest.mark.parametrize(
+    ("edits", "line", "says"),
+    [
+        ({"lamp": None}, 4, 'no mode "boost"'),
+        ({"increments/0/composite": None}, 6, 'no composite card has the id "putty"'),
+        ({"adhesive": "not-used"}, 7, 'no light of a room is called "torch"'),
+        ({"room": {"sources": []}}, 5, 'no adhesive card has the id "nobody"'),
+    ],
+)
+def test_what_the_clinics_file_gave_is_refused_in_the_clinics_file(edits, line, says):
+    clinic_file = read_document(USUAL, "clinic.yaml")
+    with pytest.raises(Refused, match=says) as refused:
+        read_plan(Document.of(edited(PLAN, edits), "plan"), Cards(documents_of(CARDS)), clinic_file)
+    place = refused.value.problems[0].place
+    assert (place.file, place.line) == ("clinic.yaml", line)
+
+
+def test_what_the_plan_gave_is_refused_in_the_plan():
+    clinic_file = read_document(USUAL.replace("torch", "window").replace("nobody", "bond"), "clinic.yaml")
+    with pytest.raises(Refused, match='no mode "bost"') as refused:
+        read_plan(Document.of(edited(PLAN, {"lamp/mode": "bost"}), "plan"), Cards(documents_of(CARDS)), clinic_file)
+    assert refused.value.problems[0].place.file == "plan"
