@@ -1,7 +1,7 @@
 /** The running page: its state, the engine it asks, and what it keeps on the device. */
 import { useEffect, useReducer, useRef, useState } from "preact/hooks";
 import { startEngine, type Engine } from "./engine";
-import { keep, lastKept } from "./keep";
+import { forget, keep, lastKept } from "./keep";
 import { fileName, openFiles, saveText } from "./open";
 import { cardsOf, clinicOf, firstState, next, type State } from "./state";
 import { problemsOf, type Answer, type Plan, type ReadAnswer, type Start } from "./types";
@@ -69,9 +69,15 @@ export function Session() {
   return (
     <App
       state={state} send={send} update={update} offline={offline}
-      onOpen={(files) => void open(files)} onSave={() => void save()}
+      onOpen={(files) => void open(files)} onSave={() => void save()} onForget={startAfresh}
     />
   );
+}
+
+/** Forgets the last plan and the opened cards, and begins as on a first visit. */
+function startAfresh(): void {
+  forget();
+  location.reload();
 }
 
 function question(state: State): { do: "check"; plan: Plan; cards: unknown; clinic: unknown; on: string | null } {

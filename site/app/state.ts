@@ -75,7 +75,7 @@ export function firstState(kept: Kept | null): State {
 
 export function next(state: State, action: Action): State {
   switch (action.is) {
-    case "progress": return { ...state, progress: action.share };
+    case "progress": return { ...state, progress: action.share, trouble: null };
     case "slow": return { ...state, trouble: words.trouble.slow };
     case "trouble": return { ...state, trouble: action.says };
     case "started": return started({ ...state, start: action.start, progress: 1, trouble: null });

@@ -134,7 +134,9 @@ def test_lamp_composite_and_adhesive_come_from_cards(context: BrowserContext, ho
 def test_the_rooms_lights_are_those_of_the_table(context: BrowserContext, home: str) -> None:
     page = opened(context, home)
     group(page, "Room, team")
-    offered = [option.get_attribute("value") for option in page.get_by_label("What", exact=True).first.locator("option").all()]
+    offered = [
+        option.get_attribute("value") for option in page.get_by_label("What", exact=True).first.locator("option").all()
+    ]
     table = yaml.safe_load((TOP / "rules" / "tables" / "room-lights.yaml").read_text())
     assert offered == [row["id"] for row in table["rows"]]
 
@@ -154,6 +156,16 @@ def test_the_plan_is_kept_for_the_next_visit(context: BrowserContext, home: str)
     page.reload()
     answered(page)
     expect(number(page, "Exposure (s)")).to_have_value("35")
+
+
+def test_what_is_kept_can_be_forgotten(context: BrowserContext, home: str) -> None:
+    page = opened(context, home)
+    number(page, "Exposure (s)").fill("35")
+    answered(page)
+    page.get_by_role("button", name="Plans", exact=True).click()
+    page.get_by_role("button", name="Forget what this device keeps").click()
+    answered(page)
+    expect(number(page, "Exposure (s)")).to_have_value("20")
 
 
 def test_a_new_plan_takes_the_clinics_usual_values(context: BrowserContext, home: str) -> None:

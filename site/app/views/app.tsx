@@ -15,11 +15,12 @@ export interface AppProps {
   readonly send: (action: Action) => void;
   readonly onOpen: (files: readonly File[]) => void;
   readonly onSave: () => void;
+  readonly onForget: () => void;
   readonly update: (() => void) | null;
   readonly offline: boolean;
 }
 
-export function App({ state, send, onOpen, onSave, update, offline }: AppProps) {
+export function App({ state, send, onOpen, onSave, onForget, update, offline }: AppProps) {
   const stale = state.answered !== null && state.answered.plan !== state.plan;
   const shown = stale && !working(state);
   return (
@@ -43,7 +44,7 @@ export function App({ state, send, onOpen, onSave, update, offline }: AppProps) 
       <footer class="foot">
         <p>{state.answered?.report.caution ?? state.start?.caution ?? words.caution} <a href="cautions/">{words.cautionMore}</a></p>
       </footer>
-      <Files state={state} send={send} onOpen={onOpen} onSave={onSave} offline={offline} />
+      <Files state={state} send={send} onOpen={onOpen} onSave={onSave} onForget={onForget} offline={offline} />
     </>
   );
 }

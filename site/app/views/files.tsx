@@ -7,10 +7,11 @@ import type { Part } from "./field";
 interface FilesProps extends Part {
   readonly onOpen: (files: readonly File[]) => void;
   readonly onSave: () => void;
+  readonly onForget: () => void;
   readonly offline: boolean;
 }
 
-export function Files({ state, send, onOpen, onSave, offline }: FilesProps) {
+export function Files({ state, send, onOpen, onSave, onForget, offline }: FilesProps) {
   const dialog = useRef<HTMLDialogElement>(null);
   useEffect(() => {
     const box = dialog.current;
@@ -40,6 +41,7 @@ export function Files({ state, send, onOpen, onSave, offline }: FilesProps) {
         </label>
         <button type="button" onClick={() => send({ is: "new" })}>{words.files.newPlan}</button>
         <button type="button" disabled={state.start === null} onClick={onSave}>{words.files.save}</button>
+        <button type="button" class="quiet" onClick={onForget}>{words.files.forget}</button>
       </div>
       <p class="hint">{state.start === null ? words.files.waiting : words.files.openHint}</p>
       {offline && <p class="hint">{words.update.offline}.</p>}

@@ -62,7 +62,7 @@ function One({ increment, scale, width, chosen, onSelect }: OneProps) {
       {short !== null && <rect x={box.x} y={scale.y(top + short)} width={box.width} height={Math.max(0, scale.y(bottom) - scale.y(top + short))} fill="url(#hatch)" />}
       <rect class="increment-edge" {...box} />
       {box.height >= BALLOON && <circle class="balloon" cx={box.x + 16} cy={middle} r={11} />}
-      {(box.height >= LETTER || chosen) && <text class="balloon-word" x={box.x + 16} y={middle + 5} text-anchor="middle">{number}</text>}
+      {box.height >= LETTER && <text class="balloon-word" x={box.x + 16} y={middle + 5} text-anchor="middle">{number}</text>}
     </g>
   );
 }

@@ -1,5 +1,5 @@
 /** The page's own words in English. A finding's sentences come from the report and are never made here. */
-import type { Mark, Problem } from "../types";
+import type { Mark } from "../types";
 
 const count = (n: number, one: string, many: string) => `${n} ${n === 1 ? one : many}`;
 
@@ -17,8 +17,6 @@ export const en = {
     working: "Working",
     starting: "Starting the engine",
     refused: "Not checked: see the findings",
-    stale: "last answer",
-    toFindings: "Go to the findings",
   },
   tools: {
     files: "Plans",
@@ -36,9 +34,9 @@ export const en = {
     openHint: "Plans, cards and clinic values, several at once: .yaml, .yml or .json. They stay on this device.",
     newPlan: "New plan",
     save: "Save this plan as a file",
-    saved: (name: string) => `Saved as ${name}`,
+    forget: "Forget what this device keeps",
     newTitle: "New plan",
-    fromNew: "New plan",
+    fromNew: "Started here",
     fromExample: "Example, invented",
     fromFile: "From a file",
     refusedTitle: (n: number) => `${count(n, "problem", "problems")}. Nothing was opened, and what was open is as it was.`,
@@ -46,7 +44,6 @@ export const en = {
     notText: "this file is not text in UTF-8",
     twoPlans: "more than one plan was chosen; open one plan at a time, with as many cards as it needs",
     notForHere: (kind: string) => `a file of kind ${kind} cannot be opened here; plans, cards and clinic values can`,
-    place: (p: Problem) => (p.line > 0 ? `${p.file}:${p.line}:${p.column}` : p.file),
     waiting: "Files can be opened once the engine has started.",
   },
   panels: {
@@ -59,8 +56,6 @@ export const en = {
   },
   increment: {
     title: (n: number, of: number) => `Increment ${n} of ${of}`,
-    onFloor: "on the floor",
-    onTop: "the last",
     pick: (n: number) => `Increment ${n}`,
     add: "Add",
     copy: "Copy",
@@ -76,7 +71,6 @@ export const en = {
     none: "Never exposed",
     add: "Add an exposure",
     remove: (n: number) => `Remove exposure ${n}`,
-    more: (n: number) => `More of exposure ${n}`,
     through: "What the light passes first",
     addThrough: "Add a layer",
     removeThrough: (n: number) => `Remove layer ${n}`,
@@ -110,7 +104,6 @@ export const en = {
     aboveOnly: (least: string) => `More than ${least}.`,
     fromOnly: (least: string) => `${least} or more.`,
     needed: "A number is needed here.",
-    notEntered: "not entered",
   },
   choose: "Choose",
   /** A value that the clinic's usual ones give. */
@@ -195,7 +188,7 @@ export const en = {
   clock: {
     title: "Chair clock",
     total: (minutes: number, seconds: number) => `${minutes} min ${String(seconds).padStart(2, "0")} s of light, placing and rests`,
-    window: (window: string, longest: string) => `Room light allows ${window} s of placing; the longest takes ${longest} s.`,
+    window: (window: string, longest: string) => `Working window (lines): ${window} s or more; the longest placing takes ${longest} s.`,
     noWindow: "Working window not known: no room light entered.",
     layers: { adhesive: "adhesive", liner: "liner", increment: "increment", after: "after the matrix" },
     does: { expose: "expose", place: "place", rest: "rest" },
@@ -204,7 +197,6 @@ export const en = {
     windows: "Working windows",
     windowColumns: ["Increment", "Window (s)", "Placing (s)"],
     describe: "Steps at the chair along time. The same in words is in the table that follows.",
-    key: { expose: "light on", place: "placing", window: "working window" },
   },
   findings: {
     title: "Findings, worst first",
@@ -212,14 +204,12 @@ export const en = {
     more: (n: number) => `${count(n, "more finding", "more findings")} of this rule`,
     /** Bodies that are written in capitals. */
     bodies: ["iso", "fdi", "icnirp", "cie"],
-    measured: "Measured",
     rule: "The rule and its source",
     missing: (names: readonly string[]) => `Not known: ${names.join(", ")}`,
     caution: "Caution",
     changed: "Changed by the clinic's protocol",
     refused: "This plan cannot be checked as it stands",
     notApplied: (n: number) => `${count(n, "rule does", "rules do")} not apply to this plan`,
-    where: (n: number) => `increment ${n}`,
     ruler: (label: string, shown: string, limits: readonly string[]) => `${label}: ${shown}. ${limits.join("; ")}.`,
     limit: (mark: string, side: "below" | "above", shown: string) => `${mark} ${side} ${shown}`,
     stale: "The plan has changed since; these are the last answer's.",
