@@ -8,25 +8,25 @@ import { useSize } from "./size";
 const [LABELS, TOP, HIGH] = [12, 20, 28];
 
 export function Clock({ drawing, stale }: { readonly drawing: Drawing | undefined; readonly stale: boolean }) {
-  const [box, { width }] = useSize<HTMLDivElement>();
+  const [box, { width, unit }] = useSize<HTMLDivElement>();
   return (
     <section class={stale ? "clock stale" : "clock"} aria-label={words.clock.title}>
       <h2>{words.clock.title} {drawing !== undefined && <span class="unit">{total(drawing.clock_s)}</span>}</h2>
-      <div class="drawing" ref={box}>{drawing !== undefined && width > 0 && <Line drawing={drawing} width={width} />}</div>
+      <div class="drawing" ref={box}>{drawing !== undefined && width > 0 && <Line drawing={drawing} width={width} unit={unit} />}</div>
       {drawing !== undefined && <p class="under">{windowSays(drawing)}</p>}
       {drawing !== undefined && <ClockTable drawing={drawing} />}
     </section>
   );
 }
 
-function Line({ drawing, width }: { readonly drawing: Drawing; readonly width: number }) {
+function Line({ drawing, width, unit }: { readonly drawing: Drawing; readonly width: number; readonly unit: number }) {
   const span = Math.max(drawing.clock_s, 1);
   const x = (seconds: number) => 1 + (seconds / span) * (width - 2);
   const every = [10, 20, 30, 60, 120, 300, 600].find((step) => (step / span) * width > 44) ?? 1200;
   const ticks = Array.from({ length: Math.floor(span / every) + 1 }, (_, index) => index * every);
   const base = TOP + HIGH;
   return (
-    <svg width={width} height={base + 50} viewBox={`0 0 ${width} ${base + 50}`} role="img" aria-label={words.clock.describe}>
+    <svg width={width * unit} height={(base + 50) * unit} viewBox={`0 0 ${width} ${base + 50}`} role="img" aria-label={words.clock.describe}>
       {layersOf(drawing.clock).map(({ label, start, end }) => (
         <g key={start}>
           <path class="bracket" d={`M${x(start) + 1} ${TOP - 3}v-3H${x(end) - 1}v3`} />

@@ -12,7 +12,7 @@ interface RulerProps {
 }
 
 export function Ruler({ findings }: RulerProps) {
-  const [box, { width }] = useSize<HTMLDivElement>();
+  const [box, { width, unit }] = useSize<HTMLDivElement>();
   const measured = findings.map((finding) => finding.measured).filter((each): each is Measured => each !== null && each.against.length > 0);
   const first = measured[0];
   if (first === undefined) return null;
@@ -21,7 +21,7 @@ export function Ruler({ findings }: RulerProps) {
   return (
     <div class="ruler" ref={box}>
       {width > 0 && (
-        <svg width={width} height={HEIGHT} viewBox={`0 0 ${width} ${HEIGHT}`} role="img" aria-label={saidOf(measured)}>
+        <svg width={width * unit} height={HEIGHT * unit} viewBox={`0 0 ${width} ${HEIGHT}`} role="img" aria-label={saidOf(measured)}>
           {zones.map((zone) => (
             <g key={zone.from}>
               <path class={`zone ${zone.mark}`} d={`M${x(zone.from)} ${LINE}H${x(zone.to)}`} />

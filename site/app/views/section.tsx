@@ -12,7 +12,7 @@ import { sectionScale, type Scale } from "./section-scale";
 import { SectionTable } from "./section-table";
 import { Tip } from "./section-tip";
 import { Tooth } from "./section-tooth";
-import { useSize } from "./size";
+import { useSize, type Size } from "./size";
 
 export function Section({ state, send, stale }: Part & { readonly stale: boolean }) {
   const [box, size] = useSize<HTMLDivElement>();
@@ -24,7 +24,7 @@ export function Section({ state, send, stale }: Part & { readonly stale: boolean
         {drawing === undefined || size.width === 0 ? (
           <p class="hint">{words.section.waiting}</p>
         ) : (
-          <Drawn drawing={drawing} scale={sectionScale(drawing, size)} width={size.width} height={size.height} state={state} send={send} />
+          <Drawn drawing={drawing} scale={sectionScale(drawing, size)} size={size} state={state} send={send} />
         )}
       </div>
       {drawing !== undefined && <SectionTable drawing={drawing} />}
@@ -35,18 +35,17 @@ export function Section({ state, send, stale }: Part & { readonly stale: boolean
 interface DrawnProps extends Part {
   readonly drawing: Drawing;
   readonly scale: Scale;
-  readonly width: number;
-  readonly height: number;
+  readonly size: Size;
 }
 
-function Drawn({ drawing, scale, width, height, state, send }: DrawnProps) {
+function Drawn({ drawing, scale, size: { width, height, unit }, state, send }: DrawnProps) {
   const exposure = effective(state.plan, clinicOf(state), ["increments", state.selected, "exposures", 0]);
   const number = (key: string) => {
     const value = at(exposure, [key]);
     return typeof value === "number" ? value : 0;
   };
   return (
-    <svg width={width} height={height} viewBox={`0 0 ${width} ${height}`} role="group" aria-label={words.section.describe}>
+    <svg width={width * unit} height={height * unit} viewBox={`0 0 ${width} ${height}`} role="group" aria-label={words.section.describe}>
       <Patterns scale={scale} />
       <rect class="grid" x={scale.gutter} y="0" width={scale.toothRight - scale.gutter} height={scale.bottom} fill="url(#grid)" />
       <Tooth drawing={drawing} scale={scale} />
