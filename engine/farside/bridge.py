@@ -1,6 +1,7 @@
 """All that the page may call: one request as JSON in, one answer as JSON out, never an exception."""
 
 import json
+import re
 from collections.abc import Callable, Mapping
 from datetime import date
 from functools import lru_cache
@@ -19,6 +20,10 @@ from farside.reading.problems import Problem, Refused
 from farside.version import VERSION
 
 _CLINIC: Final = "example-clinic"
+_DEEPEST: Final = 100
+# Text in quotes, in which no bracket counts, and brackets.
+_MARKS: Final = re.compile(r'"[^"\\]*(?:\\.[^"\\]*)*"|[\[\]{}]', re.DOTALL)
+_STEPS: Final = {"[": 1, "{": 1, "]": -1, "}": -1}
 
 
 def call(text: str) -> str:
@@ -36,13 +41,23 @@ def call(text: str) -> str:
         with `fault`, a defect of the engine itself.
     """
     try:
-        request = json.loads(text)
+        request = json.loads(_shallow(text))
         answer = _ANSWERS[request["do"]](request)
     except Refused as refused:
         answer = {"ok": False, "problems": [_problem(problem) for problem in refused.problems]}
     except Exception as fault:  # the page must say what went wrong, whatever it was
         answer = {"ok": False, "fault": f"{type(fault).__name__}: {fault}"}
     return json.dumps(answer, allow_nan=False)  # in ASCII: half a character in a file's name does no harm
+
+
+def _shallow(text: str) -> str:
+    """The text, unless it is nested too deep: the browser's stack would end the engine before Python could object."""
+    depth = 0
+    for mark in _MARKS.finditer(text):
+        depth += _STEPS.get(mark[0], 0)
+        if depth > _DEEPEST:
+            raise ValueError(f"a request is nested at most {_DEEPEST} deep")
+    return text
 
 
 def _start(_: Mapping[str, Any]) -> dict[str, Any]:

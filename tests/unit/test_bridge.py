@@ -113,6 +113,14 @@ def test_any_text_that_a_file_may_hold_comes_back(text):
     assert found == {"title": text, "list": [text, 1e-5, 1e20, True, None]}
 
 
+@pytest.mark.parametrize("depth", [98, 99])
+def test_a_request_is_nested_at_most_100_deep(depth):
+    answer = json.loads(call(f'{{"do": "write", "data": {"[" * depth}"]]]"{"]" * depth}}}'))
+    assert answer["ok"] is True
+    deeper = json.loads(call(f'{{"do": "write", "data": {"[" * 100}{"]" * 100}}}'))
+    assert deeper == {"ok": False, "fault": "ValueError: a request is nested at most 100 deep"}
+
+
 JSON = st.recursive(
     st.one_of(st.none(), st.booleans(), st.integers(-10, 10**20), st.floats(), st.text(max_size=5)),
     lambda inner: st.one_of(st.lists(inner, max_size=3), st.dictionaries(st.text(max_size=5), inner, max_size=3)),
