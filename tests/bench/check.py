@@ -3,8 +3,8 @@
     python tests/bench/check.py [--rounds 9]
 
 Beside the whole check, as the page asks for it (JSON in, JSON out), stands its light alone, and the same light by a
-vectorised NumPy version of the same model, which keeps nothing. They run in turn, and what is counted is the processor's time: on a
-busy machine it is steadier than the clock's.
+vectorised NumPy version of the same model, which keeps nothing. They run in turn, and what is counted is the
+processor's time: on a busy machine it is steadier than the clock's.
 """
 
 import argparse
