@@ -20,8 +20,20 @@ export const ROOM_LIGHTS = ["operating-light-led", "halogen", "fluorescent", "wi
 /** What an exposure may pass first. */
 const LAYERS = ["glass-ceramic", "enamel", "dentine", "strip"] as const;
 
-const number = (name: FieldName, step: number, start: number, optional = false): Field => ({ name, kind: "number", step, start, optional });
-const other = (name: FieldName, kind: Field["kind"], optional = true): Field => ({ name, kind, step: 1, start: 0, optional });
+const number = (name: FieldName, step: number, start: number, optional = false): Field => ({
+  name,
+  kind: "number",
+  step,
+  start,
+  optional,
+});
+const other = (name: FieldName, kind: Field["kind"], optional = true): Field => ({
+  name,
+  kind,
+  step: 1,
+  start: 0,
+  optional,
+});
 
 export const INCREMENT_FIRST: readonly Field[] = [number("thickness_mm", 0.5, 2)];
 

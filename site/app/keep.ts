@@ -39,5 +39,11 @@ export function forget(): void {
 function isKept(value: unknown): value is Kept {
   if (typeof value !== "object" || value === null) return false;
   const { plan, cards } = value as Partial<Kept>;
-  return Array.isArray(cards) && typeof plan?.title === "string" && Array.isArray(plan.increments) && plan.increments.length > 0 && plan.increments.every((each) => typeof each === "object" && each !== null);
+  return (
+    Array.isArray(cards) &&
+    typeof plan?.title === "string" &&
+    Array.isArray(plan.increments) &&
+    plan.increments.length > 0 &&
+    plan.increments.every((each) => typeof each === "object" && each !== null)
+  );
 }

@@ -15,7 +15,10 @@ export interface Opened {
 
 export type Reader = (name: string, text: string) => Promise<ReadAnswer>;
 
-export async function openFiles(files: readonly File[], read: Reader): Promise<Opened | { readonly problems: readonly Problem[] }> {
+export async function openFiles(
+  files: readonly File[],
+  read: Reader,
+): Promise<Opened | { readonly problems: readonly Problem[] }> {
   const problems: Problem[] = [];
   const plans: Plan[] = [];
   const cards: Card[] = [];
@@ -62,6 +65,11 @@ export function saveText(name: string, text: string): void {
 
 /** A file's name from a plan's title: plain letters and hyphens. */
 export function fileName(title: string): string {
-  const plain = title.normalize("NFKD").toLowerCase().replace(/[^a-z0-9]+/g, "-").replace(/^-+|-+$/g, "").slice(0, 60);
+  const plain = title
+    .normalize("NFKD")
+    .toLowerCase()
+    .replace(/[^a-z0-9]+/g, "-")
+    .replace(/^-+|-+$/g, "")
+    .slice(0, 60);
   return `${plain || "plan"}.yaml`;
 }

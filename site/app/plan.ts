@@ -23,7 +23,8 @@ export function effective(plan: Plan, clinic: Clinic | null, path: Path): Json |
   const own = at(plan, path);
   if (own !== undefined) return own;
   const usual = clinic?.usual;
-  if (path[0] === "increments") return path.length === 3 && path[2] === "composite" ? at(usual, ["composite"]) : undefined;
+  if (path[0] === "increments")
+    return path.length === 3 && path[2] === "composite" ? at(usual, ["composite"]) : undefined;
   return at(usual, path);
 }
 
@@ -37,7 +38,9 @@ export function edited(plan: Plan, clinic: Clinic | null, path: Path, value: Jso
 
 export function withIncrement(plan: Plan, after: number, copy: boolean): Plan {
   const model = plan.increments[after] ?? PORTION;
-  const added: Data = copy ? model : { ...PORTION, ...only(model, ["composite", "composite_temperature_c", "placing_s"]) };
+  const added: Data = copy
+    ? model
+    : { ...PORTION, ...only(model, ["composite", "composite_temperature_c", "placing_s"]) };
   return { ...plan, increments: spliced(plan.increments, after + 1, 0, added) };
 }
 

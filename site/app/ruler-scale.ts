@@ -21,10 +21,18 @@ export function rulerScale(measured: readonly Measured[]): RulerScale {
   const limits = measured[0]?.against ?? [];
   const marks = limits.map((limit) => limit.value);
   const values = measured.map((each) => each.value);
-  const least = Math.min(0, ...marks.map((mark) => mark * 1.25), ...values.map((value) => Math.max(value, -MOST_OF_LIMITS * size(marks))));
+  const least = Math.min(
+    0,
+    ...marks.map((mark) => mark * 1.25),
+    ...values.map((value) => Math.max(value, -MOST_OF_LIMITS * size(marks))),
+  );
   const furthest = Math.max(...marks, ...values.map((value) => Math.min(value, MOST_OF_LIMITS * size(marks))));
   const most = least + (furthest - least) * 1.15 || 1;
-  const cuts = [least, ...[...new Set(marks)].filter((mark) => mark > least && mark < most).sort((a, b) => a - b), most];
+  const cuts = [
+    least,
+    ...[...new Set(marks)].filter((mark) => mark > least && mark < most).sort((a, b) => a - b),
+    most,
+  ];
   const zones = cuts.slice(1).map((to, index) => {
     const from = cuts[index] ?? least;
     return { from, to, mark: markAt((from + to) / 2, limits) };
@@ -38,7 +46,10 @@ function size(marks: readonly number[]): number {
 
 function markAt(value: number, limits: readonly Limit[]): Mark {
   const failed = limits.filter((limit) => (limit.side === "below" ? value < limit.value : value > limit.value));
-  return failed.reduce<Mark>((worst, limit) => (SEVERITY.indexOf(limit.finding) > SEVERITY.indexOf(worst) ? limit.finding : worst), "clear");
+  return failed.reduce<Mark>(
+    (worst, limit) => (SEVERITY.indexOf(limit.finding) > SEVERITY.indexOf(worst) ? limit.finding : worst),
+    "clear",
+  );
 }
 
 function merged(zones: readonly Zone[]): readonly Zone[] {

@@ -36,7 +36,11 @@ export function rangeAt(path: Path): Range {
   const pick = (key: "minimum" | "maximum" | "exclusiveMinimum") =>
     found.map((schema) => schema[key]).find((value) => value !== undefined);
   const above = pick("exclusiveMinimum");
-  return { least: above ?? pick("minimum") ?? -Infinity, most: pick("maximum") ?? Infinity, above: above !== undefined };
+  return {
+    least: above ?? pick("minimum") ?? -Infinity,
+    most: pick("maximum") ?? Infinity,
+    above: above !== undefined,
+  };
 }
 
 export function inRange(value: number, range: Range): boolean {
@@ -45,13 +49,18 @@ export function inRange(value: number, range: Range): boolean {
 
 /** The words a choice at the path may take, in the schema's order. */
 export function choicesAt(path: Path): readonly string[] {
-  const words = schemasAt(path).flatMap((schema) => [...(schema.enum ?? []), ...(schema.const === undefined ? [] : [schema.const])]);
+  const words = schemasAt(path).flatMap((schema) => [
+    ...(schema.enum ?? []),
+    ...(schema.const === undefined ? [] : [schema.const]),
+  ]);
   return words.filter((word): word is string => typeof word === "string");
 }
 
 /** The number or word that counts where the plan says nothing, if the schema names one. */
 export function defaultAt(path: Path): number | string | undefined {
-  return schemasAt(path).map((schema) => schema.default).find((value): value is number | string => typeof value === "number" || typeof value === "string");
+  return schemasAt(path)
+    .map((schema) => schema.default)
+    .find((value): value is number | string => typeof value === "number" || typeof value === "string");
 }
 
 /** Every schema that speaks of the place, through references and alternatives. */

@@ -25,12 +25,15 @@ export function Session() {
       trouble: ({ trouble, detail }) => send({ is: "trouble", says: `${words.trouble[trouble]} (${detail})` }),
     });
     engine.current = started;
-    started.call<Start>({ do: "start" }).then((start) => {
-      send({ is: "started", start });
-      void keepOffline();
-      void readyOffline().then(setOffline);
-      void offerUpdate((take) => setUpdate(() => take));
-    }, () => undefined); // the listener has been told why
+    started.call<Start>({ do: "start" }).then(
+      (start) => {
+        send({ is: "started", start });
+        void keepOffline();
+        void readyOffline().then(setOffline);
+        void offerUpdate((take) => setUpdate(() => take));
+      },
+      () => undefined,
+    ); // the listener has been told why
     return () => started.stop();
   }, []);
 
@@ -39,9 +42,12 @@ export function Session() {
     const { plan } = state;
     const asked = engine.current;
     const timer = setTimeout(() => {
-      asked.latest<Answer>(question(state)).then((answer) => {
-        if (answer !== undefined) send({ is: "answered", plan, answer });
-      }, () => undefined);
+      asked.latest<Answer>(question(state)).then(
+        (answer) => {
+          if (answer !== undefined) send({ is: "answered", plan, answer });
+        },
+        () => undefined,
+      );
     }, SETTLE_MS);
     return () => clearTimeout(timer);
   }, [state.plan, state.cards, state.clinic, state.start]);
@@ -68,8 +74,13 @@ export function Session() {
 
   return (
     <App
-      state={state} send={send} update={update} offline={offline}
-      onOpen={(files) => void open(files)} onSave={() => void save()} onForget={startAfresh}
+      state={state}
+      send={send}
+      update={update}
+      offline={offline}
+      onOpen={(files) => void open(files)}
+      onSave={() => void save()}
+      onForget={startAfresh}
     />
   );
 }

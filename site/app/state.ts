@@ -2,7 +2,19 @@
 import type { Kept } from "./keep";
 import { edited, movedIncrement, newPlan, withIncrement, withoutIncrement } from "./plan";
 import { samePath } from "./paths";
-import { problemsOf, type Answer, type Card, type Clinic, type Drawing, type Json, type Path, type Plan, type Problem, type Report, type Start } from "./types";
+import {
+  problemsOf,
+  type Answer,
+  type Card,
+  type Clinic,
+  type Drawing,
+  type Json,
+  type Path,
+  type Plan,
+  type Problem,
+  type Report,
+  type Start,
+} from "./types";
 import { words } from "./words/index";
 
 export type Panel = "increment" | "cavity" | "lamp" | "adhesive" | "room";
@@ -54,7 +66,13 @@ export type Action =
   | { readonly is: "files"; readonly shown: boolean }
   | { readonly is: "new" }
   | { readonly is: "example"; readonly name: string }
-  | { readonly is: "opened"; readonly plan: Plan | null; readonly cards: readonly Card[]; readonly clinic: Clinic | null; readonly names: readonly string[] }
+  | {
+      readonly is: "opened";
+      readonly plan: Plan | null;
+      readonly cards: readonly Card[];
+      readonly clinic: Clinic | null;
+      readonly names: readonly string[];
+    }
   | { readonly is: "unopened"; readonly problems: readonly Problem[] };
 
 const FIRST_EXAMPLE = "deep-box";
@@ -62,37 +80,75 @@ const MOST_UNDO = 100;
 
 export function firstState(kept: Kept | null): State {
   return {
-    start: null, progress: 0, trouble: null,
+    start: null,
+    progress: 0,
+    trouble: null,
     plan: kept?.plan ?? newPlan(words.files.newTitle),
     from: kept?.from ?? words.files.fromNew,
     touched: kept !== null,
     cards: kept?.cards ?? [],
     clinic: kept?.clinic ?? null,
-    answered: null, refused: null, unopened: [], opened: [],
-    selected: 0, panel: "increment", filesShown: false, past: [], future: [], typing: null,
+    answered: null,
+    refused: null,
+    unopened: [],
+    opened: [],
+    selected: 0,
+    panel: "increment",
+    filesShown: false,
+    past: [],
+    future: [],
+    typing: null,
   };
 }
 
 export function next(state: State, action: Action): State {
   switch (action.is) {
-    case "progress": return { ...state, progress: action.share, trouble: null };
-    case "slow": return { ...state, trouble: words.trouble.slow };
-    case "trouble": return { ...state, trouble: action.says };
-    case "started": return started({ ...state, start: action.start, progress: 1, trouble: null });
-    case "answered": return answeredWith(state, action.plan, action.answer);
-    case "edit": return typed(state, action.path, action.value);
-    case "add": return { ...changed(state, withIncrement(state.plan, state.selected, action.copy)), selected: state.selected + 1, panel: "increment" };
-    case "remove": return { ...changed(state, withoutIncrement(state.plan, state.selected)), selected: Math.max(0, state.selected - 1) };
-    case "move": return { ...changed(state, movedIncrement(state.plan, state.selected, action.by)), selected: state.selected + action.by };
-    case "undo": return undone(state);
-    case "redo": return redone(state);
-    case "select": return { ...state, selected: action.index, panel: "increment" };
-    case "panel": return { ...state, panel: action.panel };
-    case "files": return { ...state, filesShown: action.shown, unopened: [], opened: [] };
-    case "new": return replaced(state, newPlan(words.files.newTitle), words.files.fromNew);
-    case "example": return example(state, action.name);
-    case "opened": return openedWith(state, action);
-    case "unopened": return { ...state, unopened: action.problems, opened: [] };
+    case "progress":
+      return { ...state, progress: action.share, trouble: null };
+    case "slow":
+      return { ...state, trouble: words.trouble.slow };
+    case "trouble":
+      return { ...state, trouble: action.says };
+    case "started":
+      return started({ ...state, start: action.start, progress: 1, trouble: null });
+    case "answered":
+      return answeredWith(state, action.plan, action.answer);
+    case "edit":
+      return typed(state, action.path, action.value);
+    case "add":
+      return {
+        ...changed(state, withIncrement(state.plan, state.selected, action.copy)),
+        selected: state.selected + 1,
+        panel: "increment",
+      };
+    case "remove":
+      return {
+        ...changed(state, withoutIncrement(state.plan, state.selected)),
+        selected: Math.max(0, state.selected - 1),
+      };
+    case "move":
+      return {
+        ...changed(state, movedIncrement(state.plan, state.selected, action.by)),
+        selected: state.selected + action.by,
+      };
+    case "undo":
+      return undone(state);
+    case "redo":
+      return redone(state);
+    case "select":
+      return { ...state, selected: action.index, panel: "increment" };
+    case "panel":
+      return { ...state, panel: action.panel };
+    case "files":
+      return { ...state, filesShown: action.shown, unopened: [], opened: [] };
+    case "new":
+      return replaced(state, newPlan(words.files.newTitle), words.files.fromNew);
+    case "example":
+      return example(state, action.name);
+    case "opened":
+      return openedWith(state, action);
+    case "unopened":
+      return { ...state, unopened: action.problems, opened: [] };
   }
 }
 
@@ -122,13 +178,26 @@ function started(state: State): State {
 }
 
 function answeredWith(state: State, plan: Plan, answer: Answer): State {
-  if (answer.ok) return { ...state, answered: { plan, report: answer.report, drawing: answer.drawing }, refused: null, trouble: null };
+  if (answer.ok)
+    return {
+      ...state,
+      answered: { plan, report: answer.report, drawing: answer.drawing },
+      refused: null,
+      trouble: null,
+    };
   return { ...state, refused: { plan, problems: problemsOf(answer) } };
 }
 
 function changed(state: State, plan: Plan): State {
   if (plan === state.plan) return state;
-  return { ...state, plan, touched: true, past: [...state.past, versionOf(state)].slice(-MOST_UNDO), future: [], typing: null };
+  return {
+    ...state,
+    plan,
+    touched: true,
+    past: [...state.past, versionOf(state)].slice(-MOST_UNDO),
+    future: [],
+    typing: null,
+  };
 }
 
 function typed(state: State, path: Path, value: Json | undefined): State {
@@ -163,7 +232,13 @@ function openedWith(state: State, opened: Extract<Action, { is: "opened" }>): St
 function undone(state: State): State {
   const version = state.past.at(-1);
   if (version === undefined) return state;
-  return within({ ...state, ...version, past: state.past.slice(0, -1), future: [versionOf(state), ...state.future], typing: null });
+  return within({
+    ...state,
+    ...version,
+    past: state.past.slice(0, -1),
+    future: [versionOf(state), ...state.future],
+    typing: null,
+  });
 }
 
 function redone(state: State): State {

@@ -107,19 +107,32 @@ export interface ClockStep {
 }
 
 export interface Drawing {
-  readonly cavity: { readonly depth_mm: number; readonly width_mm: number; readonly remaining_dentine_mm: number | null };
+  readonly cavity: {
+    readonly depth_mm: number;
+    readonly width_mm: number;
+    readonly remaining_dentine_mm: number | null;
+  };
   readonly tip: { readonly diameter_mm: number; readonly gap_mm: number; readonly spread_exponent: number };
   readonly increments: readonly DrawnIncrement[];
   readonly clock: readonly ClockStep[];
   readonly clock_s: number;
-  readonly window_s: readonly { readonly number: number; readonly window_s: number | null; readonly placing_s: number | null }[];
+  readonly window_s: readonly {
+    readonly number: number;
+    readonly window_s: number | null;
+    readonly placing_s: number | null;
+  }[];
 }
 
 /** What the engine says when it is ready. */
 export interface Start {
   readonly engine: string;
   readonly protocol: Protocol;
-  readonly rules: readonly { readonly id: string; readonly title: string; readonly topic: string; readonly page: string }[];
+  readonly rules: readonly {
+    readonly id: string;
+    readonly title: string;
+    readonly topic: string;
+    readonly page: string;
+  }[];
   readonly plans: readonly { readonly name: string; readonly data: Plan }[];
   readonly cards: readonly Card[];
   readonly clinic: Clinic;
@@ -128,8 +141,7 @@ export interface Start {
 
 /** What the engine will not take, or a defect of its own. */
 export type Refusal =
-  | { readonly ok: false; readonly problems: readonly Problem[] }
-  | { readonly ok: false; readonly fault: string };
+  { readonly ok: false; readonly problems: readonly Problem[] } | { readonly ok: false; readonly fault: string };
 
 export type Answer = { readonly ok: true; readonly report: Report; readonly drawing: Drawing } | Refusal;
 export type ReadAnswer = { readonly ok: true; readonly kind: string; readonly data: Data } | Refusal;

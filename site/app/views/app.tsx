@@ -26,9 +26,18 @@ export function App({ state, send, onOpen, onSave, onForget, update, offline }: 
   return (
     <>
       <Header state={state} />
-      {state.trouble !== null && <p class="trouble" role="alert">{state.trouble}</p>}
+      {state.trouble !== null && (
+        <p class="trouble" role="alert">
+          {state.trouble}
+        </p>
+      )}
       {update !== null && (
-        <p class="update" role="status">{words.update.ready} <button type="button" onClick={update}>{words.update.take}</button></p>
+        <p class="update" role="status">
+          {words.update.ready}{" "}
+          <button type="button" onClick={update}>
+            {words.update.take}
+          </button>
+        </p>
       )}
       <main class="work" id="work">
         <div class="seen">
@@ -42,7 +51,10 @@ export function App({ state, send, onOpen, onSave, onForget, update, offline }: 
         </div>
       </main>
       <footer class="foot">
-        <p>{state.answered?.report.caution ?? state.start?.caution ?? words.caution} <a href="cautions/">{words.cautionMore}</a></p>
+        <p>
+          {state.answered?.report.caution ?? state.start?.caution ?? words.caution}{" "}
+          <a href="cautions/">{words.cautionMore}</a>
+        </p>
       </footer>
       <Files state={state} send={send} onOpen={onOpen} onSave={onSave} onForget={onForget} offline={offline} />
     </>

@@ -24,11 +24,19 @@ export function Choice({ id, label, value, options, problem = null, onValue }: C
     <div class="field">
       <label for={id}>{label}</label>
       <select
-        id={id} class={problem === null ? undefined : "faulty"} value={value} aria-invalid={problem !== null}
-        aria-describedby={problem === null ? undefined : `${id}-says`} onChange={(event) => onValue(event.currentTarget.value)}
+        id={id}
+        class={problem === null ? undefined : "faulty"}
+        value={value}
+        aria-invalid={problem !== null}
+        aria-describedby={problem === null ? undefined : `${id}-says`}
+        onChange={(event) => onValue(event.currentTarget.value)}
       >
         {!known && <option value={value}>{value === "" ? words.choose : value}</option>}
-        {options.map((option) => <option key={option.value} value={option.value}>{option.label}</option>)}
+        {options.map((option) => (
+          <option key={option.value} value={option.value}>
+            {option.label}
+          </option>
+        ))}
       </select>
       <Fault id={id} says={problem} />
     </div>
@@ -50,8 +58,15 @@ export function Many({ id, label, values, options, onValues }: ManyProps) {
       {options.map(({ value, label: word }) => (
         <label key={value} class="tick">
           <input
-            type="checkbox" checked={values.includes(value)}
-            onChange={(event) => onValues(options.map((option) => option.value).filter((each) => (each === value ? event.currentTarget.checked : values.includes(each))))}
+            type="checkbox"
+            checked={values.includes(value)}
+            onChange={(event) =>
+              onValues(
+                options
+                  .map((option) => option.value)
+                  .filter((each) => (each === value ? event.currentTarget.checked : values.includes(each))),
+              )
+            }
           />
           {word}
         </label>
@@ -73,7 +88,11 @@ interface LineProps {
 export function Line({ id, label, type = "text", value, hint, problem = null, onValue }: LineProps) {
   const described = [hint === undefined ? "" : `${id}-hint`, problem === null ? "" : `${id}-says`].join(" ").trim();
   const shared = {
-    id, value, autocomplete: "off", class: problem === null ? undefined : "faulty", "aria-invalid": problem !== null,
+    id,
+    value,
+    autocomplete: "off",
+    class: problem === null ? undefined : "faulty",
+    "aria-invalid": problem !== null,
     "aria-describedby": described || undefined,
     onInput: (event: InputEvent & { readonly currentTarget: HTMLInputElement }) => onValue(event.currentTarget.value),
   };
@@ -81,12 +100,20 @@ export function Line({ id, label, type = "text", value, hint, problem = null, on
     <div class="field">
       <label for={id}>{label}</label>
       {type === "date" ? <input type="date" {...shared} /> : <input type="text" maxLength={MOST_LETTERS} {...shared} />}
-      {hint !== undefined && <p class="hint" id={`${id}-hint`}>{hint}</p>}
+      {hint !== undefined && (
+        <p class="hint" id={`${id}-hint`}>
+          {hint}
+        </p>
+      )}
       <Fault id={id} says={problem} />
     </div>
   );
 }
 
 function Fault({ id, says }: { readonly id: string; readonly says: string | null }) {
-  return says === null ? null : <p class="fault" id={`${id}-says`} role="alert">{says}</p>;
+  return says === null ? null : (
+    <p class="fault" id={`${id}-says`} role="alert">
+      {says}
+    </p>
+  );
 }

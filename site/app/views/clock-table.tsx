@@ -8,7 +8,15 @@ export function ClockTable({ drawing }: { readonly drawing: Drawing }) {
     <div class="unseen">
       <table>
         <caption>{words.clock.table}</caption>
-        <thead><tr>{words.clock.columns.map((column) => <th key={column} scope="col">{column}</th>)}</tr></thead>
+        <thead>
+          <tr>
+            {words.clock.columns.map((column) => (
+              <th key={column} scope="col">
+                {column}
+              </th>
+            ))}
+          </tr>
+        </thead>
         <tbody>
           {drawing.clock.map((step, index) => (
             <tr key={index}>
@@ -21,7 +29,15 @@ export function ClockTable({ drawing }: { readonly drawing: Drawing }) {
       </table>
       <table>
         <caption>{words.clock.windows}</caption>
-        <thead><tr>{words.clock.windowColumns.map((column) => <th key={column} scope="col">{column}</th>)}</tr></thead>
+        <thead>
+          <tr>
+            {words.clock.windowColumns.map((column) => (
+              <th key={column} scope="col">
+                {column}
+              </th>
+            ))}
+          </tr>
+        </thead>
         <tbody>
           {drawing.window_s.map(({ number, window_s: window, placing_s: placing }) => (
             <tr key={number}>

@@ -11,8 +11,12 @@ export function Clock({ drawing, stale }: { readonly drawing: Drawing | undefine
   const [box, { width, unit }] = useSize<HTMLDivElement>();
   return (
     <section class={stale ? "clock stale" : "clock"} aria-label={words.clock.title}>
-      <h2>{words.clock.title} {drawing !== undefined && <span class="unit">{total(drawing.clock_s)}</span>}</h2>
-      <div class="drawing" ref={box}>{drawing !== undefined && width > 0 && <Line drawing={drawing} width={width} unit={unit} />}</div>
+      <h2>
+        {words.clock.title} {drawing !== undefined && <span class="unit">{total(drawing.clock_s)}</span>}
+      </h2>
+      <div class="drawing" ref={box}>
+        {drawing !== undefined && width > 0 && <Line drawing={drawing} width={width} unit={unit} />}
+      </div>
       {drawing !== undefined && <p class="under">{windowSays(drawing)}</p>}
       {drawing !== undefined && <ClockTable drawing={drawing} />}
     </section>
@@ -26,27 +30,54 @@ function Line({ drawing, width, unit }: { readonly drawing: Drawing; readonly wi
   const ticks = Array.from({ length: Math.floor(span / every) + 1 }, (_, index) => index * every);
   const base = TOP + HIGH;
   return (
-    <svg width={width * unit} height={(base + 50) * unit} viewBox={`0 0 ${width} ${base + 50}`} role="img" aria-label={words.clock.describe}>
+    <svg
+      width={width * unit}
+      height={(base + 50) * unit}
+      viewBox={`0 0 ${width} ${base + 50}`}
+      role="img"
+      aria-label={words.clock.describe}
+    >
       {layersOf(drawing.clock).map(({ label, start, end }) => (
         <g key={start}>
           <path class="bracket" d={`M${x(start) + 1} ${TOP - 3}v-3H${x(end) - 1}v3`} />
-          {x(end) - x(start) > label.length * 8 && <text x={(x(start) + x(end)) / 2} y={LABELS - 2} text-anchor="middle">{label}</text>}
+          {x(end) - x(start) > label.length * 8 && (
+            <text x={(x(start) + x(end)) / 2} y={LABELS - 2} text-anchor="middle">
+              {label}
+            </text>
+          )}
         </g>
       ))}
-      {drawing.clock.map((step) => <Step key={`${step.start_s}-${step.what}`} step={step} from={x(step.start_s)} to={x(step.start_s + step.length_s)} />)}
+      {drawing.clock.map((step) => (
+        <Step
+          key={`${step.start_s}-${step.what}`}
+          step={step}
+          from={x(step.start_s)}
+          to={x(step.start_s + step.length_s)}
+        />
+      ))}
       {drawing.window_s.map(({ number, window_s: window, placing_s: placing }) => {
-        const place = drawing.clock.find((step) => step.what === "place" && step.layer === "increment" && step.number === number);
+        const place = drawing.clock.find(
+          (step) => step.what === "place" && step.layer === "increment" && step.number === number,
+        );
         if (place === undefined || window === null) return null;
         const [from, to] = [x(place.start_s), Math.min(width - 1, x(place.start_s + window))];
         const y = base + (number % 2 === 1 ? 6 : 13);
         const over = placing !== null && placing > window;
-        return <path key={number} class={over ? "window over" : "window"} d={`M${from} ${y}H${to}M${from} ${y - 3}v6M${to} ${y - 3}v6`} />;
+        return (
+          <path
+            key={number}
+            class={over ? "window over" : "window"}
+            d={`M${from} ${y}H${to}M${from} ${y - 3}v6M${to} ${y - 3}v6`}
+          />
+        );
       })}
       <path class="time" d={`M1 ${base + 24}H${width - 1}`} />
       {ticks.map((tick) => (
         <g key={tick}>
           <path class="time" d={`M${x(tick)} ${base + 24}v5`} />
-          <text x={x(tick)} y={base + 43} text-anchor={tick === 0 ? "start" : x(tick) > width - 16 ? "end" : "middle"}>{tick === 0 ? "0 s" : tick}</text>
+          <text x={x(tick)} y={base + 43} text-anchor={tick === 0 ? "start" : x(tick) > width - 16 ? "end" : "middle"}>
+            {tick === 0 ? "0 s" : tick}
+          </text>
         </g>
       ))}
     </svg>
@@ -58,7 +89,11 @@ function Step({ step, from, to }: { readonly step: ClockStep; readonly from: num
   return (
     <g class={`step ${step.what}`}>
       <rect x={from + 0.5} y={TOP} width={Math.max(1, to - from - 1)} height={HIGH} />
-      {to - from > label.length * 8 + 4 && <text x={(from + to) / 2} y={TOP + HIGH / 2 + 5} text-anchor="middle">{label}</text>}
+      {to - from > label.length * 8 + 4 && (
+        <text x={(from + to) / 2} y={TOP + HIGH / 2 + 5} text-anchor="middle">
+          {label}
+        </text>
+      )}
     </g>
   );
 }

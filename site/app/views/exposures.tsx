@@ -23,14 +23,20 @@ export function Exposures({ state, send, path, firstShown = false }: ExposuresPr
         <section key={index} class="exposure" aria-label={words.exposure.title(index + 1)}>
           <div class="exposure-head">
             <h3>{words.exposure.title(index + 1)}</h3>
-            <button type="button" class="quiet" aria-label={words.exposure.remove(index + 1)} onClick={() => put(list.filter((__, each) => each !== index))}>
+            <button
+              type="button"
+              class="quiet"
+              aria-label={words.exposure.remove(index + 1)}
+              onClick={() => put(list.filter((__, each) => each !== index))}
+            >
               {words.increment.remove}
             </button>
           </div>
           <div class="fields">
-            {!(firstShown && index === 0) && EXPOSURE_FIRST.map((field) => (
-              <FieldView key={field.name} state={state} send={send} under={[...path, index]} field={field} />
-            ))}
+            {!(firstShown && index === 0) &&
+              EXPOSURE_FIRST.map((field) => (
+                <FieldView key={field.name} state={state} send={send} under={[...path, index]} field={field} />
+              ))}
             {EXPOSURE_MORE.filter((field) => field.name !== "side" || exposure["from"] === "side").map((field) => (
               <FieldView key={field.name} state={state} send={send} under={[...path, index]} field={field} />
             ))}
@@ -38,7 +44,9 @@ export function Exposures({ state, send, path, firstShown = false }: ExposuresPr
           <Through state={state} send={send} path={[...path, index, "through"]} />
         </section>
       ))}
-      <button type="button" disabled={list.length >= MOST_EXPOSURES} onClick={() => put([...list, last])}>{words.exposure.add}</button>
+      <button type="button" disabled={list.length >= MOST_EXPOSURES} onClick={() => put([...list, last])}>
+        {words.exposure.add}
+      </button>
     </div>
   );
 }
@@ -51,8 +59,12 @@ function Through({ state, send, path }: ExposuresProps) {
       {layers.length > 0 && <h4>{words.exposure.through}</h4>}
       {layers.map((_, index) => (
         <div key={index} class="fields">
-          {THROUGH.map((field) => <FieldView key={field.name} state={state} send={send} under={[...path, index]} field={field} />)}
-          <button type="button" class="quiet" onClick={() => put(layers.filter((__, each) => each !== index))}>{words.exposure.removeThrough(index + 1)}</button>
+          {THROUGH.map((field) => (
+            <FieldView key={field.name} state={state} send={send} under={[...path, index]} field={field} />
+          ))}
+          <button type="button" class="quiet" onClick={() => put(layers.filter((__, each) => each !== index))}>
+            {words.exposure.removeThrough(index + 1)}
+          </button>
         </div>
       ))}
       <button type="button" class="quiet" onClick={() => put([...layers, { what: "glass-ceramic", thickness_mm: 1 }])}>

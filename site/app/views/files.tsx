@@ -24,24 +24,40 @@ export function Files({ state, send, onOpen, onSave, onForget, offline }: FilesP
     <dialog ref={dialog} class="files" aria-labelledby="files-title" onClose={() => state.filesShown && close()}>
       <div class="files-head">
         <h2 id="files-title">{words.files.title}</h2>
-        <button type="button" onClick={close}>{words.files.close}</button>
+        <button type="button" onClick={close}>
+          {words.files.close}
+        </button>
       </div>
       <Unopened problems={state.unopened} />
-      {state.opened.length > 0 && <p class="opened" role="status">{words.files.opened(state.opened)}</p>}
+      {state.opened.length > 0 && (
+        <p class="opened" role="status">
+          {words.files.opened(state.opened)}
+        </p>
+      )}
       <div class="files-do">
         <label class={state.start === null ? "button main off" : "button main"}>
           {words.files.open}
           <input
-            class="unseen" type="file" multiple accept=".yaml,.yml,.json" disabled={state.start === null}
+            class="unseen"
+            type="file"
+            multiple
+            accept=".yaml,.yml,.json"
+            disabled={state.start === null}
             onChange={(event) => {
               onOpen([...(event.currentTarget.files ?? [])]);
               event.currentTarget.value = "";
             }}
           />
         </label>
-        <button type="button" onClick={() => send({ is: "new" })}>{words.files.newPlan}</button>
-        <button type="button" disabled={state.start === null} onClick={onSave}>{words.files.save}</button>
-        <button type="button" class="quiet" onClick={onForget}>{words.files.forget}</button>
+        <button type="button" onClick={() => send({ is: "new" })}>
+          {words.files.newPlan}
+        </button>
+        <button type="button" disabled={state.start === null} onClick={onSave}>
+          {words.files.save}
+        </button>
+        <button type="button" class="quiet" onClick={onForget}>
+          {words.files.forget}
+        </button>
       </div>
       <p class="hint">{state.start === null ? words.files.waiting : words.files.openHint}</p>
       {offline && <p class="hint">{words.update.offline}.</p>}
@@ -50,7 +66,9 @@ export function Files({ state, send, onOpen, onSave, onForget, offline }: FilesP
       <ul class="examples">
         {(state.start?.plans ?? []).map(({ name, data }) => (
           <li key={name}>
-            <button type="button" onClick={() => send({ is: "example", name })}>{data.title}</button>
+            <button type="button" onClick={() => send({ is: "example", name })}>
+              {data.title}
+            </button>
           </li>
         ))}
       </ul>
@@ -64,7 +82,9 @@ function Unopened({ problems }: { readonly problems: readonly Problem[] }) {
   return (
     <div class="refusal" role="alert">
       <h3>{words.files.refusedTitle(problems.length)}</h3>
-      {problems.map((problem, index) => <pre key={index}>{problem.shown}</pre>)}
+      {problems.map((problem, index) => (
+        <pre key={index}>{problem.shown}</pre>
+      ))}
     </div>
   );
 }

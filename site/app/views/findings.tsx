@@ -13,10 +13,19 @@ export function Findings({ state, stale }: { readonly state: State; readonly sta
   const refused = state.refused?.plan === state.plan ? state.refused.problems : null;
   const report = state.answered?.report;
   return (
-    <section class={stale ? "findings stale" : "findings"} id="findings" aria-label={words.findings.title} tabIndex={-1}>
+    <section
+      class={stale ? "findings stale" : "findings"}
+      id="findings"
+      aria-label={words.findings.title}
+      tabIndex={-1}
+    >
       <h2>{words.findings.title}</h2>
       {refused !== null && <Refusal problems={refused} past={report !== undefined} />}
-      {report === undefined ? refused === null && <p class="hint">{words.findings.none}</p> : <Told report={report} pages={pagesOf(state)} />}
+      {report === undefined ? (
+        refused === null && <p class="hint">{words.findings.none}</p>
+      ) : (
+        <Told report={report} pages={pagesOf(state)} />
+      )}
     </section>
   );
 }
@@ -25,7 +34,11 @@ export function Refusal({ problems, past }: { readonly problems: readonly Proble
   return (
     <div class="refusal" role="alert">
       <h3>{words.findings.refused}</h3>
-      <ul>{problems.map((problem, index) => <li key={index}>{problem.message}</li>)}</ul>
+      <ul>
+        {problems.map((problem, index) => (
+          <li key={index}>{problem.message}</li>
+        ))}
+      </ul>
       {past && <p class="hint">{words.findings.stale}</p>}
     </div>
   );
@@ -37,13 +50,23 @@ function Told({ report, pages }: { readonly report: Report; readonly pages: (rul
   return (
     <>
       <ol class="list">
-        {grouped(rest).map((group) => <li key={group.key}><One group={group} pages={pages} /></li>)}
+        {grouped(rest).map((group) => (
+          <li key={group.key}>
+            <One group={group} pages={pages} />
+          </li>
+        ))}
       </ol>
       {clear.length > 0 && (
         <details class="clear-ones">
-          <summary><MarkShape mark="clear" /> {report.clear_says}</summary>
+          <summary>
+            <MarkShape mark="clear" /> {report.clear_says}
+          </summary>
           <ul>
-            {grouped(clear).map(({ key, findings: [first] }) => <li key={key}><a href={pages(first.rule)}>{first.title}</a></li>)}
+            {grouped(clear).map(({ key, findings: [first] }) => (
+              <li key={key}>
+                <a href={pages(first.rule)}>{first.title}</a>
+              </li>
+            ))}
           </ul>
           {report.not_applied.length > 0 && <p class="hint">{words.findings.notApplied(report.not_applied.length)}</p>}
         </details>
@@ -64,9 +87,19 @@ function One({ group, pages }: { readonly group: Group; readonly pages: (rule: s
         <Sayings says={distinct(findings.map((finding) => finding.says))} />
         {missing.length > 0 && <p class="missing">{words.findings.missing(missing)}</p>}
         <Ruler findings={findings} />
-        {distinct(findings.map((finding) => finding.do)).map((text) => <p key={text} class="do">{text}</p>)}
-        {distinct(findings.map((finding) => finding.caution)).map((text) => <p key={text} class="caution"><b>{words.findings.caution}.</b> {text}</p>)}
-        {findings.some((finding) => finding.changed !== null && finding.changed !== undefined) && <p class="changed">{words.findings.changed}</p>}
+        {distinct(findings.map((finding) => finding.do)).map((text) => (
+          <p key={text} class="do">
+            {text}
+          </p>
+        ))}
+        {distinct(findings.map((finding) => finding.caution)).map((text) => (
+          <p key={text} class="caution">
+            <b>{words.findings.caution}.</b> {text}
+          </p>
+        ))}
+        {findings.some((finding) => finding.changed !== null && finding.changed !== undefined) && (
+          <p class="changed">{words.findings.changed}</p>
+        )}
         <Grounds finding={first} page={page} />
       </div>
     </article>
@@ -79,11 +112,19 @@ function Sayings({ says: [first, ...others] }: { readonly says: readonly string[
   return (
     <>
       <h3>{first}</h3>
-      {others.slice(0, FEW).map((says) => <p key={says} class="says">{says}</p>)}
+      {others.slice(0, FEW).map((says) => (
+        <p key={says} class="says">
+          {says}
+        </p>
+      ))}
       {folded.length > 0 && (
         <details>
           <summary>{words.findings.more(folded.length)}</summary>
-          {folded.map((says) => <p key={says} class="says">{says}</p>)}
+          {folded.map((says) => (
+            <p key={says} class="says">
+              {says}
+            </p>
+          ))}
         </details>
       )}
     </>
@@ -95,9 +136,15 @@ function Grounds({ finding, page }: { readonly finding: Finding; readonly page: 
   const strengths: Readonly<Record<string, string>> = words.findings.strength;
   return (
     <p class="grounds">
-      <a class="rule" href={page}>{finding.title}</a>
+      <a class="rule" href={page}>
+        {finding.title}
+      </a>
       <span>{strengths[finding.strength] ?? finding.strength}</span>
-      {finding.sources.map((source) => <a key={source} href={`${page}#sources`}>{cited(source)}</a>)}
+      {finding.sources.map((source) => (
+        <a key={source} href={`${page}#sources`}>
+          {cited(source)}
+        </a>
+      ))}
     </p>
   );
 }

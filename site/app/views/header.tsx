@@ -11,7 +11,10 @@ export function Header({ state }: { readonly state: State }) {
       <div class="what">
         <div class="title">
           <h1>{state.plan.title || words.name}</h1>
-          <p>{state.from}{on !== undefined && `, ${words.header.on(on)}`}</p>
+          <p>
+            {state.from}
+            {on !== undefined && `, ${words.header.on(on)}`}
+          </p>
         </div>
         <p class="facts">
           <LampFacts state={state} />
@@ -44,7 +47,11 @@ function ProtocolFacts({ state }: { readonly state: State }) {
   if (protocol === undefined) return null;
   return (
     <span>
-      {words.header.protocol} <b>{protocol.id} {protocol.edition}</b> <code title={protocol.digest}>{protocol.digest.slice(0, 8)}</code>
+      {words.header.protocol}{" "}
+      <b>
+        {protocol.id} {protocol.edition}
+      </b>{" "}
+      <code title={protocol.digest}>{protocol.digest.slice(0, 8)}</code>
     </span>
   );
 }
@@ -57,11 +64,19 @@ function Verdict({ state }: { readonly state: State }) {
   return (
     <div class="verdict-place">
       <a class={`verdict ${refused ? "open" : (report?.verdict ?? "none")} ${busy ? "busy" : ""}`} href="#findings">
-        {refused ? <MarkShape mark="open" size={18} /> : report !== undefined && <MarkShape mark={report.verdict} size={18} />}
-        <span class="verdict-words">{settled || (state.start === null ? words.header.starting : words.header.working)}</span>
+        {refused ? (
+          <MarkShape mark="open" size={18} />
+        ) : (
+          report !== undefined && <MarkShape mark={report.verdict} size={18} />
+        )}
+        <span class="verdict-words">
+          {settled || (state.start === null ? words.header.starting : words.header.working)}
+        </span>
         {busy && settled !== "" && <span class="busy-word">{words.header.working}</span>}
       </a>
-      {state.start === null && state.trouble === null && <progress max="1" value={state.progress} aria-label={words.header.starting} />}
+      {state.start === null && state.trouble === null && (
+        <progress max="1" value={state.progress} aria-label={words.header.starting} />
+      )}
       <Announced settled={settled} busy={busy} />
     </div>
   );
@@ -69,5 +84,9 @@ function Verdict({ state }: { readonly state: State }) {
 
 /** The verdict once it is settled, for those who hear the page; silent while an answer is on its way. */
 function Announced({ settled, busy }: { readonly settled: string; readonly busy: boolean }) {
-  return <p class="unseen" role="status" aria-live="polite">{busy ? "" : settled}</p>;
+  return (
+    <p class="unseen" role="status" aria-live="polite">
+      {busy ? "" : settled}
+    </p>
+  );
 }

@@ -19,10 +19,30 @@ export function MarkShape({ mark, size = 14 }: { readonly mark: Mark; readonly s
 }
 
 /** The same shape inside another drawing, centred at a point. */
-export function MarkAt({ mark, x, y, size = 11 }: { readonly mark: Mark; readonly x: number; readonly y: number; readonly size?: number }) {
-  return <path class={`mark ${mark}`} d={SHAPES[mark]} transform={`translate(${x - size / 2} ${y - size / 2}) scale(${size / 14})`} />;
+export function MarkAt({
+  mark,
+  x,
+  y,
+  size = 11,
+}: {
+  readonly mark: Mark;
+  readonly x: number;
+  readonly y: number;
+  readonly size?: number;
+}) {
+  return (
+    <path
+      class={`mark ${mark}`}
+      d={SHAPES[mark]}
+      transform={`translate(${x - size / 2} ${y - size / 2}) scale(${size / 14})`}
+    />
+  );
 }
 
 export function MarkWord({ mark }: { readonly mark: Mark }) {
-  return <span class={`mark-word ${mark}`}><MarkShape mark={mark} /> {words.marks[mark]}</span>;
+  return (
+    <span class={`mark-word ${mark}`}>
+      <MarkShape mark={mark} /> {words.marks[mark]}
+    </span>
+  );
 }

@@ -10,11 +10,17 @@ export function CavityPanel({ state, send }: Part) {
   return (
     <>
       <Line
-        id="title" label={words.plan.title} value={state.plan.title} hint={words.plan.noPatient} problem={problemAt(state, ["title"])}
+        id="title"
+        label={words.plan.title}
+        value={state.plan.title}
+        hint={words.plan.noPatient}
+        problem={problemAt(state, ["title"])}
         onValue={(title) => send({ is: "edit", path: ["title"], value: title })}
       />
       <div class="fields">
-        {CAVITY.map(({ path, field }) => <FieldView key={field.name} state={state} send={send} under={path} field={field} />)}
+        {CAVITY.map(({ path, field }) => (
+          <FieldView key={field.name} state={state} send={send} under={path} field={field} />
+        ))}
       </div>
       <details>
         <summary>{words.adhesive.after}</summary>

@@ -19,15 +19,20 @@ export function IncrementPanel({ state, send }: Part) {
       <Order state={state} send={send} />
       <div class="fields first">
         <CompositeChoice state={state} send={send} />
-        {INCREMENT_FIRST.map((field) => <FieldView key={field.name} state={state} send={send} under={path} field={field} />)}
-        {exposed && EXPOSURE_FIRST.map((field) => (
-          <FieldView key={field.name} state={state} send={send} under={[...path, "exposures", 0]} field={field} />
+        {INCREMENT_FIRST.map((field) => (
+          <FieldView key={field.name} state={state} send={send} under={path} field={field} />
         ))}
+        {exposed &&
+          EXPOSURE_FIRST.map((field) => (
+            <FieldView key={field.name} state={state} send={send} under={[...path, "exposures", 0]} field={field} />
+          ))}
       </div>
       <details>
         <summary>{words.increment.more}</summary>
         <div class="fields">
-          {INCREMENT_MORE.map((field) => <FieldView key={field.name} state={state} send={send} under={path} field={field} />)}
+          {INCREMENT_MORE.map((field) => (
+            <FieldView key={field.name} state={state} send={send} under={path} field={field} />
+          ))}
         </div>
         <Exposures state={state} send={send} path={[...path, "exposures"]} firstShown />
       </details>
@@ -46,18 +51,49 @@ function Order({ state, send }: Part) {
         {plan.increments.map((_, index) => {
           const mark = working(state) ? undefined : drawn?.[index]?.finding;
           return (
-            <button key={index} type="button" class="pick" aria-pressed={index === selected} aria-label={words.increment.pick(index + 1)} onClick={() => send({ is: "select", index })}>
+            <button
+              key={index}
+              type="button"
+              class="pick"
+              aria-pressed={index === selected}
+              aria-label={words.increment.pick(index + 1)}
+              onClick={() => send({ is: "select", index })}
+            >
               {index + 1} {mark !== undefined && <MarkShape mark={mark} />}
             </button>
           );
         })}
       </div>
       <div class="moves" role="group" aria-label={words.increment.title(selected + 1, count)}>
-        <button type="button" class="sign" aria-label={words.increment.down} title={words.increment.down} disabled={selected === 0} onClick={() => send({ is: "move", by: -1 })}><Icon name="down" /></button>
-        <button type="button" class="sign" aria-label={words.increment.up} title={words.increment.up} disabled={selected === count - 1} onClick={() => send({ is: "move", by: 1 })}><Icon name="up" /></button>
-        <button type="button" disabled={count >= MOST_INCREMENTS} onClick={() => send({ is: "add", copy: false })}>{words.increment.add}</button>
-        <button type="button" disabled={count >= MOST_INCREMENTS} onClick={() => send({ is: "add", copy: true })}>{words.increment.copy}</button>
-        <button type="button" disabled={count === 1} onClick={() => send({ is: "remove" })}>{words.increment.remove}</button>
+        <button
+          type="button"
+          class="sign"
+          aria-label={words.increment.down}
+          title={words.increment.down}
+          disabled={selected === 0}
+          onClick={() => send({ is: "move", by: -1 })}
+        >
+          <Icon name="down" />
+        </button>
+        <button
+          type="button"
+          class="sign"
+          aria-label={words.increment.up}
+          title={words.increment.up}
+          disabled={selected === count - 1}
+          onClick={() => send({ is: "move", by: 1 })}
+        >
+          <Icon name="up" />
+        </button>
+        <button type="button" disabled={count >= MOST_INCREMENTS} onClick={() => send({ is: "add", copy: false })}>
+          {words.increment.add}
+        </button>
+        <button type="button" disabled={count >= MOST_INCREMENTS} onClick={() => send({ is: "add", copy: true })}>
+          {words.increment.copy}
+        </button>
+        <button type="button" disabled={count === 1} onClick={() => send({ is: "remove" })}>
+          {words.increment.remove}
+        </button>
       </div>
     </div>
   );
@@ -75,8 +111,12 @@ function CompositeChoice({ state, send }: Part) {
   ];
   return (
     <Choice
-      id={path.join("-")} label={words.increment.composite} value={typeof own === "string" ? own : ""} options={options}
-      problem={problemAt(state, path)} onValue={(id) => send({ is: "edit", path, value: id || undefined })}
+      id={path.join("-")}
+      label={words.increment.composite}
+      value={typeof own === "string" ? own : ""}
+      options={options}
+      problem={problemAt(state, path)}
+      onValue={(id) => send({ is: "edit", path, value: id || undefined })}
     />
   );
 }

@@ -25,15 +25,26 @@ export function LampPanel({ state, send }: Part) {
     <>
       <div class="fields">
         <Choice
-          id="lamp-card" label={words.lamp.card} value={value("card")} problem={problemAt(state, ["lamp", "card"])}
-          options={lamps.map((card) => ({ value: card.id, label: card.title }))} onValue={choose}
+          id="lamp-card"
+          label={words.lamp.card}
+          value={value("card")}
+          problem={problemAt(state, ["lamp", "card"])}
+          options={lamps.map((card) => ({ value: card.id, label: card.title }))}
+          onValue={choose}
         />
         <Choice
-          id="lamp-mode" label={words.lamp.mode} value={value("mode")} problem={problemAt(state, ["lamp", "mode"])}
-          options={modesOf(lamp).map((mode) => ({ value: mode, label: mode }))} onValue={(mode) => set("mode", mode)}
+          id="lamp-mode"
+          label={words.lamp.mode}
+          value={value("mode")}
+          problem={problemAt(state, ["lamp", "mode"])}
+          options={modesOf(lamp).map((mode) => ({ value: mode, label: mode }))}
+          onValue={(mode) => set("mode", mode)}
         />
         <Choice
-          id="lamp-sleeve" label={words.lamp.sleeve} value={value("sleeve")} problem={problemAt(state, ["lamp", "sleeve"])}
+          id="lamp-sleeve"
+          label={words.lamp.sleeve}
+          value={value("sleeve")}
+          problem={problemAt(state, ["lamp", "sleeve"])}
           options={choicesAt(["lamp", "sleeve"]).map((word) => ({ value: word, label: optionWord("sleeve", word) }))}
           onValue={(sleeve) => set("sleeve", sleeve)}
         />
@@ -57,7 +68,9 @@ function Readings({ lamp }: { readonly lamp: Card }) {
       {rows.length > 0 && <h3>{words.lamp.readings}</h3>}
       <ul>
         {rows.map((row, index) => (
-          <li key={index}>{String(row["on"])}: {words.header.reading(String(row["radiant_exitance_mw_cm2"]))}, {String(row["mode"])}</li>
+          <li key={index}>
+            {String(row["on"])}: {words.header.reading(String(row["radiant_exitance_mw_cm2"]))}, {String(row["mode"])}
+          </li>
         ))}
       </ul>
     </div>

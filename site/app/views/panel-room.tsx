@@ -19,17 +19,25 @@ export function RoomPanel({ state, send }: Part) {
         <h3>{words.room.sources}</h3>
         {sources.map((_, index) => (
           <div key={index} class="fields">
-            {SOURCE.map((field) => <FieldView key={field.name} state={state} send={send} under={[...SOURCES, index]} field={field} />)}
-            <button type="button" class="quiet low" onClick={() => put(sources.filter((__, each) => each !== index))}>{words.room.remove(index + 1)}</button>
+            {SOURCE.map((field) => (
+              <FieldView key={field.name} state={state} send={send} under={[...SOURCES, index]} field={field} />
+            ))}
+            <button type="button" class="quiet low" onClick={() => put(sources.filter((__, each) => each !== index))}>
+              {words.room.remove(index + 1)}
+            </button>
           </div>
         ))}
-        <button type="button" onClick={() => put([...sources, { what: first, illuminance_lx: 8000, filter: "none" }])}>{words.room.add}</button>
+        <button type="button" onClick={() => put([...sources, { what: first, illuminance_lx: 8000, filter: "none" }])}>
+          {words.room.add}
+        </button>
       </section>
       <section aria-label={words.room.team}>
         <h3>{words.room.team}</h3>
         <p class="hint">{words.room.yesNoOnly}</p>
         <div class="fields">
-          {TEAM.map((field) => <FieldView key={field.name} state={state} send={send} under={["team"]} field={field} />)}
+          {TEAM.map((field) => (
+            <FieldView key={field.name} state={state} send={send} under={["team"]} field={field} />
+          ))}
         </div>
       </section>
     </>

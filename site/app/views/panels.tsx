@@ -10,7 +10,11 @@ import { LampPanel } from "./panel-lamp";
 import { RoomPanel } from "./panel-room";
 
 const VIEWS: Record<Panel, (part: Part) => preact.JSX.Element> = {
-  increment: IncrementPanel, cavity: CavityPanel, lamp: LampPanel, adhesive: AdhesivePanel, room: RoomPanel,
+  increment: IncrementPanel,
+  cavity: CavityPanel,
+  lamp: LampPanel,
+  adhesive: AdhesivePanel,
+  room: RoomPanel,
 };
 const ORDER = Object.keys(VIEWS) as Panel[];
 
@@ -30,8 +34,14 @@ export function Panels({ state, send }: Part) {
       <div class="tabs" role="tablist" aria-label={words.panels.label} ref={list} onKeyDown={move}>
         {ORDER.map((panel) => (
           <button
-            key={panel} type="button" role="tab" id={`tab-${panel}`} aria-controls="panel" aria-selected={panel === state.panel}
-            tabIndex={panel === state.panel ? 0 : -1} onClick={() => send({ is: "panel", panel })}
+            key={panel}
+            type="button"
+            role="tab"
+            id={`tab-${panel}`}
+            aria-controls="panel"
+            aria-selected={panel === state.panel}
+            tabIndex={panel === state.panel ? 0 : -1}
+            onClick={() => send({ is: "panel", panel })}
           >
             {words.panels[panel]}
           </button>

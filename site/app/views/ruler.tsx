@@ -13,7 +13,9 @@ interface RulerProps {
 
 export function Ruler({ findings }: RulerProps) {
   const [box, { width, unit }] = useSize<HTMLDivElement>();
-  const measured = findings.map((finding) => finding.measured).filter((each): each is Measured => each !== null && each.against.length > 0);
+  const measured = findings
+    .map((finding) => finding.measured)
+    .filter((each): each is Measured => each !== null && each.against.length > 0);
   const first = measured[0];
   if (first === undefined) return null;
   const { least, most, zones } = rulerScale(measured);
@@ -21,11 +23,19 @@ export function Ruler({ findings }: RulerProps) {
   return (
     <div class="ruler" ref={box}>
       {width > 0 && (
-        <svg width={width * unit} height={HEIGHT * unit} viewBox={`0 0 ${width} ${HEIGHT}`} role="img" aria-label={saidOf(measured)}>
+        <svg
+          width={width * unit}
+          height={HEIGHT * unit}
+          viewBox={`0 0 ${width} ${HEIGHT}`}
+          role="img"
+          aria-label={saidOf(measured)}
+        >
           {zones.map((zone) => (
             <g key={zone.from}>
               <path class={`zone ${zone.mark}`} d={`M${x(zone.from)} ${LINE}H${x(zone.to)}`} />
-              {x(zone.to) - x(zone.from) > 22 && <MarkAt mark={zone.mark} x={(x(zone.from) + x(zone.to)) / 2} y={LINE} />}
+              {x(zone.to) - x(zone.from) > 22 && (
+                <MarkAt mark={zone.mark} x={(x(zone.from) + x(zone.to)) / 2} y={LINE} />
+              )}
             </g>
           ))}
           <Limits measured={first} at={x} width={width} />
@@ -36,8 +46,18 @@ export function Ruler({ findings }: RulerProps) {
   );
 }
 
-function Limits({ measured, at, width }: { readonly measured: Measured; readonly at: (value: number) => number; readonly width: number }) {
-  const limits = [...new Map(measured.against.map((limit) => [limit.value, limit])).values()].sort((a, b) => a.value - b.value);
+function Limits({
+  measured,
+  at,
+  width,
+}: {
+  readonly measured: Measured;
+  readonly at: (value: number) => number;
+  readonly width: number;
+}) {
+  const limits = [...new Map(measured.against.map((limit) => [limit.value, limit])).values()].sort(
+    (a, b) => a.value - b.value,
+  );
   let taken = -Infinity;
   return (
     <g class="limits">
@@ -49,7 +69,11 @@ function Limits({ measured, at, width }: { readonly measured: Measured; readonly
         return (
           <g key={limit.value}>
             <path d={`M${at(limit.value)} ${LINE - 9}v18`} />
-            {room && <text x={place} y={HEIGHT - 4} text-anchor="middle">{limit.shown}</text>}
+            {room && (
+              <text x={place} y={HEIGHT - 4} text-anchor="middle">
+                {limit.shown}
+              </text>
+            )}
           </g>
         );
       })}
@@ -58,9 +82,15 @@ function Limits({ measured, at, width }: { readonly measured: Measured; readonly
 }
 
 /** One pointer a finding, numbered by increment where there are several. */
-function Pointers({ findings, at, width }: RulerProps & { readonly at: (value: number) => number; readonly width: number }) {
+function Pointers({
+  findings,
+  at,
+  width,
+}: RulerProps & { readonly at: (value: number) => number; readonly width: number }) {
   let taken = -Infinity;
-  const sorted = findings.flatMap((finding) => (finding.measured === null ? [] : [{ finding, measured: finding.measured }])).sort((a, b) => a.measured.value - b.measured.value);
+  const sorted = findings
+    .flatMap((finding) => (finding.measured === null ? [] : [{ finding, measured: finding.measured }]))
+    .sort((a, b) => a.measured.value - b.measured.value);
   return (
     <g>
       {sorted.map(({ finding, measured }, index) => {
@@ -73,7 +103,11 @@ function Pointers({ findings, at, width }: RulerProps & { readonly at: (value: n
         return (
           <g key={index} class={`pointer ${finding.finding}`}>
             <path d={`M${x} ${LINE - 3}l-6 -12h12z`} />
-            {room && <text x={place} y={LINE - 20} text-anchor="middle">{label}</text>}
+            {room && (
+              <text x={place} y={LINE - 20} text-anchor="middle">
+                {label}
+              </text>
+            )}
           </g>
         );
       })}
@@ -83,6 +117,12 @@ function Pointers({ findings, at, width }: RulerProps & { readonly at: (value: n
 
 function saidOf(measured: readonly Measured[]): string {
   return measured
-    .map((each) => words.findings.ruler(each.label, `${each.shown} ${each.unit}`.trim(), each.against.map((limit) => words.findings.limit(words.marks[limit.finding], limit.side, limit.shown))))
+    .map((each) =>
+      words.findings.ruler(
+        each.label,
+        `${each.shown} ${each.unit}`.trim(),
+        each.against.map((limit) => words.findings.limit(words.marks[limit.finding], limit.side, limit.shown)),
+      ),
+    )
     .join(" ");
 }

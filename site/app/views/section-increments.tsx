@@ -19,8 +19,12 @@ export function Increments({ drawing, scale, selected, onSelect }: IncrementsPro
     <g>
       {drawing.increments.map((increment, index) => (
         <One
-          key={increment.number} increment={increment} scale={scale} width={drawing.cavity.width_mm}
-          chosen={index === selected} onSelect={() => onSelect(index)}
+          key={increment.number}
+          increment={increment}
+          scale={scale}
+          width={drawing.cavity.width_mm}
+          chosen={index === selected}
+          onSelect={() => onSelect(index)}
         />
       ))}
       {chosen !== undefined && <rect class="chosen-edge" {...boxOf(chosen, scale, drawing.cavity.width_mm)} />}
@@ -44,11 +48,19 @@ function One({ increment, scale, width, chosen, onSelect }: OneProps) {
   const { number, top_mm: top, bottom_mm: bottom, short_from_mm: short, finding } = increment;
   const box = boxOf(increment, scale, width);
   const mark = words.marks[finding];
-  const label = increment.far_shown === null ? words.section.pickUnknown(number, mark) : words.section.pick(number, increment.far_shown, mark);
+  const label =
+    increment.far_shown === null
+      ? words.section.pickUnknown(number, mark)
+      : words.section.pick(number, increment.far_shown, mark);
   const middle = box.y + box.height / 2;
   return (
     <g
-      class="increment" role="button" tabindex={0} aria-pressed={chosen} aria-label={label} data-number={number}
+      class="increment"
+      role="button"
+      tabindex={0}
+      aria-pressed={chosen}
+      aria-label={label}
+      data-number={number}
       onClick={onSelect}
       onKeyDown={(event) => {
         if (event.key !== "Enter" && event.key !== " ") return;
@@ -59,10 +71,22 @@ function One({ increment, scale, width, chosen, onSelect }: OneProps) {
       <Ink increment={increment} />
       <rect class="increment-ground" {...box} />
       <rect {...box} fill={`url(#ink-${number})`} />
-      {short !== null && <rect x={box.x} y={scale.y(top + short)} width={box.width} height={Math.max(0, scale.y(bottom) - scale.y(top + short))} fill="url(#hatch)" />}
+      {short !== null && (
+        <rect
+          x={box.x}
+          y={scale.y(top + short)}
+          width={box.width}
+          height={Math.max(0, scale.y(bottom) - scale.y(top + short))}
+          fill="url(#hatch)"
+        />
+      )}
       <rect class="increment-edge" {...box} />
       {box.height >= BALLOON && <circle class="balloon" cx={box.x + 16} cy={middle} r={11} />}
-      {box.height >= LETTER && <text class="balloon-word" x={box.x + 16} y={middle + 5} text-anchor="middle">{number}</text>}
+      {box.height >= LETTER && (
+        <text class="balloon-word" x={box.x + 16} y={middle + 5} text-anchor="middle">
+          {number}
+        </text>
+      )}
     </g>
   );
 }

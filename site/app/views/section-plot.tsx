@@ -26,19 +26,43 @@ export function Plot({ drawing, scale, selected }: PlotProps) {
   const roomy = axis.at(2) - need >= 16;
   return (
     <g class="plot" aria-hidden="true">
-      <rect class="plot-ground" x={scale.plotLeft} y={top} width={scale.plotRight - scale.plotLeft} height={bottom - top} />
+      <rect
+        class="plot-ground"
+        x={scale.plotLeft}
+        y={top}
+        width={scale.plotRight - scale.plotLeft}
+        height={bottom - top}
+      />
       {axis.ticks.map((tick) => (
         <g key={tick}>
-          <path class={tick === 1 ? "need-line" : "plot-line"} d={`M${axis.at(tick)} ${tick === 1 ? top - 8 : top}V${bottom + 4}`} />
-          {(tick >= 1 || roomy) && <text x={axis.at(tick)} y={bottom + 18} text-anchor="middle">{FRACTIONS[tick] ?? shownNumber(tick)}</text>}
+          <path
+            class={tick === 1 ? "need-line" : "plot-line"}
+            d={`M${axis.at(tick)} ${tick === 1 ? top - 8 : top}V${bottom + 4}`}
+          />
+          {(tick >= 1 || roomy) && (
+            <text x={axis.at(tick)} y={bottom + 18} text-anchor="middle">
+              {FRACTIONS[tick] ?? shownNumber(tick)}
+            </text>
+          )}
         </g>
       ))}
-      <text class="need-word" x={need} y={top - 13} text-anchor="middle">{words.section.need}</text>
+      <text class="need-word" x={need} y={top - 13} text-anchor="middle">
+        {words.section.need}
+      </text>
       {words.section.axis.map((word, line) => (
-        <text key={word} x={scale.plotRight} y={bottom + 38 + 17 * line} text-anchor="end">{word}</text>
+        <text key={word} x={scale.plotRight} y={bottom + 38 + 17 * line} text-anchor="end">
+          {word}
+        </text>
       ))}
       {drawing.increments.map((increment, index) => (
-        <Curve key={increment.number} increment={increment} scale={scale} at={axis.at} wall={wall} chosen={index === selected} />
+        <Curve
+          key={increment.number}
+          increment={increment}
+          scale={scale}
+          at={axis.at}
+          wall={wall}
+          chosen={index === selected}
+        />
       ))}
     </g>
   );
@@ -53,12 +77,22 @@ interface CurveProps {
 }
 
 function Curve({ increment, scale, at, wall, chosen }: CurveProps) {
-  const { top_mm: top, bottom_mm: bottom, profile, far_share: far, far_shown: shown, short_from_mm: short, finding } = increment;
+  const {
+    top_mm: top,
+    bottom_mm: bottom,
+    profile,
+    far_share: far,
+    far_shown: shown,
+    short_from_mm: short,
+    finding,
+  } = increment;
   const y = scale.y(bottom);
   const points = profile.map(([depth, share]) => `${at(share).toFixed(1)} ${scale.y(top + depth).toFixed(1)}`);
   const roomy = (bottom - top) * scale.perMm >= LINE || chosen;
   const lacking = far !== null && far < 1;
-  const lack = profile.filter(([depth]) => short !== null && depth >= short).map(([depth, share]) => `${at(share).toFixed(1)} ${scale.y(top + depth).toFixed(1)}`);
+  const lack = profile
+    .filter(([depth]) => short !== null && depth >= short)
+    .map(([depth, share]) => `${at(share).toFixed(1)} ${scale.y(top + depth).toFixed(1)}`);
   return (
     <g class={chosen ? "curve chosen" : "curve"}>
       <path class="leader" d={`M${wall} ${y}H${scale.plotRight}`} />
@@ -67,7 +101,11 @@ function Curve({ increment, scale, at, wall, chosen }: CurveProps) {
       )}
       {points.length > 1 && <path class="curve-line" d={`M${points.join("L")}`} />}
       {far !== null && <circle class={lacking ? "far stop" : "far"} cx={at(far)} cy={y} r="4" />}
-      {roomy && <text class={lacking ? "far-word stop" : "far-word"} x={scale.plotLeft - 8} y={y - 5} text-anchor="end">{shown ?? "–"}</text>}
+      {roomy && (
+        <text class={lacking ? "far-word stop" : "far-word"} x={scale.plotLeft - 8} y={y - 5} text-anchor="end">
+          {shown ?? "–"}
+        </text>
+      )}
       {roomy && <MarkAt mark={finding} x={scale.toothRight + 9} y={y - 10} />}
     </g>
   );

@@ -41,22 +41,36 @@ export function sectionScale({ cavity, tip, increments }: Drawing, { width, heig
   const slack = Math.max(0, room.height - upright * perMm);
   const opening = 4 + TIP_BODY + Math.max(tip.gap_mm, -top, 1.2) * perMm + slack / 2;
   return {
-    perMm, wallMm: WALL_MM, tipBody: TIP_BODY, dentineMm, gutter: GUTTER,
-    toothRight: width - plot, plotLeft: width - plot + FIGURES, plotRight: width - 8, bottom: height - 2 - slack / 4,
+    perMm,
+    wallMm: WALL_MM,
+    tipBody: TIP_BODY,
+    dentineMm,
+    gutter: GUTTER,
+    toothRight: width - plot,
+    plotLeft: width - plot + FIGURES,
+    plotRight: width - 8,
+    bottom: height - 2 - slack / 4,
     x: (mm) => centre + mm * perMm,
     y: (mm) => opening + mm * perMm,
   };
 }
 
 /** A place on the plot's axis of shares, by doublings, kept inside the axis. */
-export function shareAxis(drawing: Drawing, scale: Scale): { readonly ticks: readonly number[]; at(share: number): number } {
-  const shares = drawing.increments.flatMap((increment) => increment.profile.map(([, share]) => share)).filter((share) => share > 0);
+export function shareAxis(
+  drawing: Drawing,
+  scale: Scale,
+): { readonly ticks: readonly number[]; at(share: number): number } {
+  const shares = drawing.increments
+    .flatMap((increment) => increment.profile.map(([, share]) => share))
+    .filter((share) => share > 0);
   const least = Math.max(-4, Math.min(-1, Math.floor(Math.log2(Math.min(1, ...shares)))));
   const most = Math.min(6, Math.max(1, Math.ceil(Math.log2(Math.max(2, ...shares)))));
   const width = scale.plotRight - scale.plotLeft;
   return {
     ticks: Array.from({ length: most - least + 1 }, (_, index) => 2 ** (least + index)),
-    at: (share) => scale.plotLeft + (width * (Math.min(most, Math.max(least, Math.log2(Math.max(share, 1e-9)))) - least)) / (most - least),
+    at: (share) =>
+      scale.plotLeft +
+      (width * (Math.min(most, Math.max(least, Math.log2(Math.max(share, 1e-9)))) - least)) / (most - least),
   };
 }
 

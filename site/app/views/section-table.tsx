@@ -10,7 +10,15 @@ export function SectionTable({ drawing }: { readonly drawing: Drawing }) {
       <p>{words.section.says(shownNumber(cavity.depth_mm), shownNumber(cavity.width_mm), shownNumber(tip.gap_mm))}</p>
       <table>
         <caption>{words.section.table}</caption>
-        <thead><tr>{words.section.columns.map((column) => <th key={column} scope="col">{column}</th>)}</tr></thead>
+        <thead>
+          <tr>
+            {words.section.columns.map((column) => (
+              <th key={column} scope="col">
+                {column}
+              </th>
+            ))}
+          </tr>
+        </thead>
         <tbody>
           {increments.map((each) => (
             <tr key={each.number}>

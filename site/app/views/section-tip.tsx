@@ -25,11 +25,16 @@ export function Tip({ drawing, scale, tilt, offset, side }: TipProps) {
   const axis = (tip.gap_mm * scale.perMm) / Math.max(0.2, Math.cos(turn));
   return (
     <g class={side ? "tip aside" : "tip"} aria-hidden="true">
-      <path class="beam-edge" d={`M${left.join(" ")}L${scale.x(-mouth)} ${scale.y(0)}M${right.join(" ")}L${scale.x(mouth)} ${scale.y(0)}`} />
+      <path
+        class="beam-edge"
+        d={`M${left.join(" ")}L${scale.x(-mouth)} ${scale.y(0)}M${right.join(" ")}L${scale.x(mouth)} ${scale.y(0)}`}
+      />
       <g transform={`rotate(${-tilt} ${x} ${y})`}>
         <path class="tip-body" d={`M${x - half} ${y}v${-scale.tipBody + 12}q0 -8 8 -8H${x + half - 8}q8 0 8 8V${y}z`} />
         <path class="tip-face" d={`M${x - half} ${y - 5}h${2 * half}v5h${-2 * half}z`} />
-        <text class="tip-word" x={x} y={y - 12} text-anchor="middle">{words.section.tip(shownNumber(tip.diameter_mm))}</text>
+        <text class="tip-word" x={x} y={y - 12} text-anchor="middle">
+          {words.section.tip(shownNumber(tip.diameter_mm))}
+        </text>
         <path class="axis" d={`M${x} ${y}v${axis}`} />
       </g>
     </g>

@@ -59,5 +59,8 @@ export function Tooth({ drawing, scale }: ToothProps) {
 function waved(from: number, to: number, y: number): string {
   const waves = 6;
   const step = (to - from) / waves;
-  return Array.from({ length: waves }, (_, index) => `q${step / 2} ${index % 2 === 0 ? -5 : 5} ${step} 0`).join(" ") + ` M${to} ${y}`;
+  return (
+    Array.from({ length: waves }, (_, index) => `q${step / 2} ${index % 2 === 0 ? -5 : 5} ${step} 0`).join(" ") +
+    ` M${to} ${y}`
+  );
 }

@@ -19,7 +19,9 @@ export function Section({ state, send, stale }: Part & { readonly stale: boolean
   const drawing = state.answered?.drawing;
   return (
     <section class={stale ? "section stale" : "section"} aria-label={words.section.title}>
-      <h2>{words.section.title} <span class="unit">{words.section.unit}</span></h2>
+      <h2>
+        {words.section.title} <span class="unit">{words.section.unit}</span>
+      </h2>
       <div class="drawing" ref={box}>
         {drawing === undefined || size.width === 0 ? (
           <p class="hint">{words.section.waiting}</p>
@@ -45,14 +47,38 @@ function Drawn({ drawing, scale, size: { width, height, unit }, state, send }: D
     return typeof value === "number" ? value : 0;
   };
   return (
-    <svg width={width * unit} height={height * unit} viewBox={`0 0 ${width} ${height}`} role="group" aria-label={words.section.describe}>
+    <svg
+      width={width * unit}
+      height={height * unit}
+      viewBox={`0 0 ${width} ${height}`}
+      role="group"
+      aria-label={words.section.describe}
+    >
       <Patterns scale={scale} />
-      <rect class="grid" x={scale.gutter} y="0" width={scale.toothRight - scale.gutter} height={scale.bottom} fill="url(#grid)" />
+      <rect
+        class="grid"
+        x={scale.gutter}
+        y="0"
+        width={scale.toothRight - scale.gutter}
+        height={scale.bottom}
+        fill="url(#grid)"
+      />
       <Tooth drawing={drawing} scale={scale} />
-      <Tip drawing={drawing} scale={scale} tilt={number("tilt_deg")} offset={number("aim_offset_mm")} side={at(exposure, ["from"]) === "side"} />
+      <Tip
+        drawing={drawing}
+        scale={scale}
+        tilt={number("tilt_deg")}
+        offset={number("aim_offset_mm")}
+        side={at(exposure, ["from"]) === "side"}
+      />
       <Chain drawing={drawing} scale={scale} />
       <Plot drawing={drawing} scale={scale} selected={state.selected} />
-      <Increments drawing={drawing} scale={scale} selected={state.selected} onSelect={(index) => send({ is: "select", index })} />
+      <Increments
+        drawing={drawing}
+        scale={scale}
+        selected={state.selected}
+        onSelect={(index) => send({ is: "select", index })}
+      />
     </svg>
   );
 }
@@ -77,20 +103,28 @@ function Chain({ drawing, scale }: { readonly drawing: Drawing; readonly scale: 
   const spans: (readonly [number, number])[] = [
     [-tip.gap_mm, Math.min(0, increments.at(-1)?.top_mm ?? 0)],
     ...increments.map((each) => [each.top_mm, each.bottom_mm] as const),
-    ...(cavity.remaining_dentine_mm === null ? [] : [[cavity.depth_mm, cavity.depth_mm + cavity.remaining_dentine_mm] as const]),
+    ...(cavity.remaining_dentine_mm === null
+      ? []
+      : [[cavity.depth_mm, cavity.depth_mm + cavity.remaining_dentine_mm] as const]),
   ];
   const x = scale.gutter - 6;
   return (
     <g class="chain" aria-hidden="true">
-      {spans.filter(([from, to]) => to - from > 1e-6).map(([from, to], index) => {
-        const [top, bottom] = [scale.y(from), scale.y(to)];
-        return (
-          <g key={index}>
-            <path d={`M${x} ${top}V${bottom}M${x - 5} ${top}h10M${x - 5} ${bottom}h10`} />
-            {bottom - top > 11 && <text x={x - 8} y={(top + bottom) / 2 + 4.5} text-anchor="end">{shownMm(to - from)}</text>}
-          </g>
-        );
-      })}
+      {spans
+        .filter(([from, to]) => to - from > 1e-6)
+        .map(([from, to], index) => {
+          const [top, bottom] = [scale.y(from), scale.y(to)];
+          return (
+            <g key={index}>
+              <path d={`M${x} ${top}V${bottom}M${x - 5} ${top}h10M${x - 5} ${bottom}h10`} />
+              {bottom - top > 11 && (
+                <text x={x - 8} y={(top + bottom) / 2 + 4.5} text-anchor="end">
+                  {shownMm(to - from)}
+                </text>
+              )}
+            </g>
+          );
+        })}
     </g>
   );
 }

@@ -27,19 +27,31 @@ export function Stepper({ id, label, value, range, step, start, optional, proble
   };
   const type = (text: string) => {
     setTyped(text);
-    if (faultIn(text, range, optional) === null) onValue(text.trim() === "" ? undefined : (numberFrom(text) ?? undefined));
+    if (faultIn(text, range, optional) === null)
+      onValue(text.trim() === "" ? undefined : (numberFrom(text) ?? undefined));
   };
   return (
     <div class="field">
       <label for={id}>{label}</label>
       <div class={said === null ? "stepper" : "stepper faulty"}>
-        <button type="button" aria-label={words.stepper.less(label)} disabled={value !== undefined && value <= range.least} onClick={() => press(-1)}>
+        <button
+          type="button"
+          aria-label={words.stepper.less(label)}
+          disabled={value !== undefined && value <= range.least}
+          onClick={() => press(-1)}
+        >
           −
         </button>
         <input
-          id={id} type="text" inputMode="decimal" autocomplete="off" spellcheck={false}
-          value={typed ?? (value === undefined ? "" : shownNumber(value))} placeholder="–"
-          aria-invalid={said !== null} aria-describedby={said === null ? undefined : `${id}-says`}
+          id={id}
+          type="text"
+          inputMode="decimal"
+          autocomplete="off"
+          spellcheck={false}
+          value={typed ?? (value === undefined ? "" : shownNumber(value))}
+          placeholder="–"
+          aria-invalid={said !== null}
+          aria-describedby={said === null ? undefined : `${id}-says`}
           onInput={(event) => type(event.currentTarget.value)}
           onBlur={() => fault === null && setTyped(null)}
           onKeyDown={(event) => {
@@ -48,11 +60,20 @@ export function Stepper({ id, label, value, range, step, start, optional, proble
             press(event.key === "ArrowUp" ? 1 : -1);
           }}
         />
-        <button type="button" aria-label={words.stepper.more(label)} disabled={value !== undefined && value >= range.most} onClick={() => press(1)}>
+        <button
+          type="button"
+          aria-label={words.stepper.more(label)}
+          disabled={value !== undefined && value >= range.most}
+          onClick={() => press(1)}
+        >
           +
         </button>
       </div>
-      {said !== null && <p class="fault" id={`${id}-says`} role="alert">{said}</p>}
+      {said !== null && (
+        <p class="fault" id={`${id}-says`} role="alert">
+          {said}
+        </p>
+      )}
     </div>
   );
 }
@@ -66,7 +87,8 @@ function faultIn(text: string, range: Range, optional: boolean): string | null {
 }
 
 function outside({ least, most, above }: Range): string {
-  if (most === Infinity) return above ? words.stepper.aboveOnly(shownNumber(least)) : words.stepper.fromOnly(shownNumber(least));
+  if (most === Infinity)
+    return above ? words.stepper.aboveOnly(shownNumber(least)) : words.stepper.fromOnly(shownNumber(least));
   return words.stepper.outside(shownNumber(least), shownNumber(most));
 }
 
