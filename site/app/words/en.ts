@@ -231,7 +231,7 @@ export const en = {
     total: (minutes: number, seconds: number) =>
       `${minutes} min ${String(seconds).padStart(2, "0")} s of light, placing and rests`,
     window: (window: string, longest: string) =>
-      `Working window (lines): ${window} s or more; the longest placing takes ${longest} s.`,
+      `Working window (lines) ${window} s; longest placing ${longest} s.`,
     noWindow: "Working window not known: no room light entered.",
     layers: { adhesive: "adhesive", liner: "liner", increment: "increment", after: "after the matrix" },
     does: { expose: "expose", place: "place", rest: "rest" },
