@@ -43,7 +43,7 @@ def initiator_parts(document: Document, data: Mapping[str, Any]) -> tuple[Parts,
     known = known_initiators()
     resin = data.get("resin_weight_share")
     resin_share = assumption("resin-weight-share") if resin is None else float(resin)
-    resin_from: Provenance = "assumed" if resin is None else provenance(data.get("resin_provenance", "maker"))
+    resin_from: Provenance = "assumed" if resin is None else "measured"
     entries = data.get("initiators")
     if not entries:
         standard = known["camphorquinone"]
@@ -71,7 +71,8 @@ def resolved_paste(
     """A composite's paste, and where its optics came from.
 
     A transmittance is turned into absorption with the card's scattering, else the usual one of its shade. With assumed
-    optics the paste's own absorption is at least 0; with assumed initiators theirs is at most the total.
+    optics the paste's own absorption is at least 0; where the amount of initiator is assumed, theirs is at most the
+    total.
 
     Raises
     ------

@@ -59,7 +59,8 @@ def read_composite(document: Document) -> Composite:
     """
     data = filled(checked(document).data, "composite")
     parts, initiators_from, resin_from = initiator_parts(document, data)
-    paste, optics_from = resolved_paste(document, data, parts, initiators_assumed=initiators_from == "assumed")
+    amount_assumed = "assumed" in {initiators_from, resin_from}
+    paste, optics_from = resolved_paste(document, data, parts, initiators_assumed=amount_assumed)
     fields = {**data, "optics": {**data.get("optics", {}), "provenance": optics_from}}
     ambient = data.get("ambient")
     return Composite(

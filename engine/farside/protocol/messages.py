@@ -51,6 +51,7 @@ INPUTS: Final[Mapping[str, str]] = {
     "composite.expires": "the composite's expiry date",
     "adhesive.maker_instructions": "a row of the adhesive's maker's instructions",
     "liner.maker_instructions": "a row of the liner's maker's instructions",
+    "plan.placing_times": "the placing time of each increment",
     "plan.adhesive": "the adhesive",
     "plan.liner": "the liner",
     "plan.cavity.remaining_dentine_mm": "the remaining dentine",

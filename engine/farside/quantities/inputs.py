@@ -38,6 +38,11 @@ def _initiators_known(subject: Subject) -> Provenance | None:
     return None if known == "assumed" else known
 
 
+def _placing_times(subject: Subject) -> Provenance | None:
+    known = all(increment.placing_s is not None for increment in subject.trace.plan.increments)
+    return "measured" if known else None
+
+
 def _resin(subject: Subject) -> Provenance | None:
     return subject.composite.resin_provenance if subject.composite else None
 
@@ -83,6 +88,7 @@ _ORIGINS: Final[Mapping[str, Callable[[Subject], Provenance | None]]] = {
     "composite.optics": _optics,
     "composite.initiators": _initiators,
     "composite.initiators_known": _initiators_known,
+    "plan.placing_times": _placing_times,
     "composite.resin_weight_share": _resin,
     "composite.maker_instructions": _instructions,
     "composite.ambient": _ambient,

@@ -5,6 +5,7 @@ from typing import Final
 
 from farside.clinic.materials import chosen_row
 from farside.clinic.plan import LayerUse
+from farside.quantities.inputs import origin
 from farside.quantities.quantity import Quantity, Value
 from farside.quantities.reach import ADHESIVE_REACH, BEAM_REACH, LIGHT_REACH, beyond
 from farside.quantities.subject import Subject, subjects
@@ -73,6 +74,8 @@ def _at_one_site(subject: Subject) -> Value | None:
 
 
 def _chair_time_s(subject: Subject) -> Value | None:
+    if origin("plan.placing_times", subject) is None:
+        return None
     clock = subject.trace.clock
     return clock[-1].end_s if clock else None
 
@@ -124,7 +127,14 @@ OF_PLAN: Final[tuple[Quantity, ...]] = (
         lambda subject: subject.trace.plan.distance_after_mm(-1),
         formula="gap_mm + cavity depth",
     ),
-    Quantity("chair_time_s", "plan", "s", "from the first exposure or placing to the last", _chair_time_s),
+    Quantity(
+        "chair_time_s",
+        "plan",
+        "s",
+        "from the first exposure or placing to the last",
+        _chair_time_s,
+        reads=("plan.placing_times",),
+    ),
     Quantity(
         "adhesive_time_s",
         "plan",

@@ -172,6 +172,12 @@ def test_assumed_initiators_take_at_most_a_measured_total():
     assert found.absorption_per_mm() == pytest.approx(0.05)
 
 
+def test_initiators_in_an_assumed_amount_of_resin_take_at_most_a_measured_total():
+    found = composite({"resin_weight_share": None, "optics/absorption_per_mm": 0.05})
+    assert found.resin_provenance == "assumed"
+    assert found.absorption_per_mm() == pytest.approx(0.05)
+
+
 @pytest.mark.parametrize("absorption", [0.15, 0.3, 0.8])
 def test_a_transmittance_is_turned_back_into_the_absorption_that_gives_it(absorption):
     share = slab(2.0, absorption, 1.0, refractive_index=1.5).transmittance
