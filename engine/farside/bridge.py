@@ -10,12 +10,12 @@ from typing import Any, Final
 from farside import shipped
 from farside.check import check
 from farside.clinic.cards import Cards, documents_of
-from farside.clinic.reading import checked
+from farside.clinic.opened import open_files
 from farside.export.drawing import as_drawing
 from farside.export.yaml_file import as_yaml
 from farside.protocol.protocol import base_protocol
 from farside.protocol.wording import said
-from farside.reading.document import Document, read_document
+from farside.reading.document import Document
 from farside.reading.problems import Problem, Refused
 from farside.version import VERSION
 
@@ -32,7 +32,7 @@ def call(text: str) -> str:
     Parameters
     ----------
     text : str
-        A JSON mapping whose `do` is `start`, `check`, `read` or `write`.
+        A JSON mapping whose `do` is `start`, `check`, `open` or `write`.
 
     Returns
     -------
@@ -97,9 +97,19 @@ def _cards(text: str) -> Cards:
     return Cards(documents_of(json.loads(text)))
 
 
-def _read(request: Mapping[str, Any]) -> dict[str, Any]:
-    document = checked(read_document(request["text"], request["name"]))
-    return {"ok": True, "kind": document.data["kind"], "data": document.data}
+def _open(request: Mapping[str, Any]) -> dict[str, Any]:
+    clinic = request.get("clinic")
+    opened = open_files(
+        [(file["name"], file["text"]) for file in request["files"]],
+        documents_of(request.get("cards", ())),
+        None if clinic is None else Document.of(clinic, "clinic"),
+    )
+    return {
+        "ok": True,
+        "plan": opened.plan and opened.plan.data,
+        "cards": [card.data for card in opened.cards],
+        "clinic": opened.clinic and opened.clinic.data,
+    }
 
 
 def _write(request: Mapping[str, Any]) -> dict[str, Any]:
@@ -122,6 +132,6 @@ def _problem(problem: Problem) -> dict[str, Any]:
 _ANSWERS: Final[Mapping[str, Callable[[Mapping[str, Any]], dict[str, Any]]]] = {
     "start": _start,
     "check": _check,
-    "read": _read,
+    "open": _open,
     "write": _write,
 }

@@ -1,44 +1,25 @@
-/** Opens the files a person chose: all of them or, where one is refused, none. */
-import { problemsOf, type Card, type Clinic, type Data, type Plan, type Problem, type ReadAnswer } from "./types";
+/** The files a person chose, as text for the engine; and a plan's text as a file for the person. */
+import type { Problem } from "./types";
 import { words } from "./words/index";
 
 /** A little over the engine's own limit, so that the engine is the one to say that a file is too large. */
 const MOST_READ = 1_200_000;
-const CARDS = new Set(["lamp", "composite", "adhesive", "liner"]);
 
-export interface Opened {
-  readonly plan: Plan | null;
-  readonly cards: readonly Card[];
-  readonly clinic: Clinic | null;
-  readonly names: readonly string[];
+export interface Texts {
+  readonly texts: readonly { readonly name: string; readonly text: string }[];
+  /** The files that are no text at all. */
+  readonly problems: readonly Problem[];
 }
 
-export type Reader = (name: string, text: string) => Promise<ReadAnswer>;
-
-export async function openFiles(
-  files: readonly File[],
-  read: Reader,
-): Promise<Opened | { readonly problems: readonly Problem[] }> {
-  const problems: Problem[] = [];
-  const plans: Plan[] = [];
-  const cards: Card[] = [];
-  let clinic: Clinic | null = null;
+export async function textsOf(files: readonly File[]): Promise<Texts> {
+  const texts = [];
+  const problems = [];
   for (const file of files) {
     const text = await textOf(file);
-    if (text === null) {
-      problems.push(said(file.name, words.files.notText));
-      continue;
-    }
-    const answer = await read(file.name, text);
-    if (!answer.ok) problems.push(...problemsOf(answer));
-    else if (answer.kind === "plan") plans.push(answer.data as Plan);
-    else if (CARDS.has(answer.kind)) cards.push(answer.data as Card);
-    else if (answer.kind === "clinic") clinic = answer.data as Data;
-    else problems.push(said(file.name, words.files.notForHere(answer.kind)));
+    if (text === null) problems.push(notText(file.name));
+    else texts.push({ name: file.name, text });
   }
-  if (plans.length > 1) problems.push(said(files.map((file) => file.name).join(", "), words.files.twoPlans));
-  if (problems.length > 0) return { problems };
-  return { plan: plans[0] ?? null, cards, clinic, names: files.map((file) => file.name) };
+  return { texts, problems };
 }
 
 async function textOf(file: File): Promise<string | null> {
@@ -50,7 +31,8 @@ async function textOf(file: File): Promise<string | null> {
   }
 }
 
-function said(file: string, message: string): Problem {
+function notText(file: string): Problem {
+  const message = words.files.notText;
   return { file, line: 0, column: 0, path: [], message, text: "", shown: `${file}: ${message}` };
 }
 

@@ -3,6 +3,13 @@ import type { Limit, Mark, Measured } from "./types";
 
 const SEVERITY: readonly Mark[] = ["clear", "watch", "open", "revise", "stop"];
 const MOST_OF_LIMITS = 2.5;
+/** On which side of a limit the finding lies. */
+const FAILS: Record<Limit["side"], (value: number, limit: number) => boolean> = {
+  below: (value, limit) => value < limit,
+  at_most: (value, limit) => value <= limit,
+  above: (value, limit) => value > limit,
+  at_least: (value, limit) => value >= limit,
+};
 
 export interface Zone {
   readonly from: number;
@@ -45,7 +52,7 @@ function size(marks: readonly number[]): number {
 }
 
 function markAt(value: number, limits: readonly Limit[]): Mark {
-  const failed = limits.filter((limit) => (limit.side === "below" ? value < limit.value : value > limit.value));
+  const failed = limits.filter((limit) => FAILS[limit.side](value, limit.value));
   return failed.reduce<Mark>(
     (worst, limit) => (SEVERITY.indexOf(limit.finding) > SEVERITY.indexOf(worst) ? limit.finding : worst),
     "clear",

@@ -2,9 +2,9 @@
 import { useEffect, useReducer, useRef, useState } from "preact/hooks";
 import { startEngine, type Engine } from "./engine";
 import { forget, keep, lastKept } from "./keep";
-import { fileName, openFiles, saveText } from "./open";
+import { fileName, saveText, textsOf } from "./open";
 import { cardsOf, clinicOf, firstState, next, type State } from "./state";
-import { problemsOf, type Answer, type Plan, type ReadAnswer, type Start } from "./types";
+import { problemsOf, type Answer, type Plan, type OpenAnswer, type Start } from "./types";
 import { keepOffline, offerUpdate, readyOffline } from "./updates";
 import { App } from "./views/app";
 import { words } from "./words/index";
@@ -59,12 +59,13 @@ export function Session() {
   const open = async (files: readonly File[]) => {
     const asked = engine.current;
     if (asked === null || files.length === 0) return;
-    const found = await openFiles(files, (name, text) => asked.call<ReadAnswer>({ do: "read", name, text }));
-    if ("problems" in found) return send({ is: "unopened", problems: found.problems });
-    const tried = next(state, { is: "opened", ...found });
-    const answer = await asked.call<Answer>(question(tried));
-    if (answer.ok || found.plan === null) send({ is: "opened", ...found });
-    else send({ is: "unopened", problems: problemsOf(answer) });
+    const { texts, problems } = await textsOf(files);
+    if (problems.length > 0) return send({ is: "unopened", problems });
+    const held = { cards: cardsOf(state), clinic: clinicOf(state) };
+    const answer = await asked.call<OpenAnswer>({ do: "open", files: texts, ...held });
+    if (!answer.ok) return send({ is: "unopened", problems: problemsOf(answer) });
+    const { plan, cards, clinic } = answer;
+    return send({ is: "opened", plan, cards, clinic, names: files.map((file) => file.name) });
   };
 
   const save = async () => {

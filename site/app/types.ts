@@ -26,7 +26,7 @@ export interface Limit {
   readonly value: number;
   readonly shown: string;
   readonly finding: Mark;
-  readonly side: "below" | "above";
+  readonly side: "below" | "above" | "at_most" | "at_least";
 }
 
 export interface Measured {
@@ -144,7 +144,9 @@ export type Refusal =
   { readonly ok: false; readonly problems: readonly Problem[] } | { readonly ok: false; readonly fault: string };
 
 export type Answer = { readonly ok: true; readonly report: Report; readonly drawing: Drawing } | Refusal;
-export type ReadAnswer = { readonly ok: true; readonly kind: string; readonly data: Data } | Refusal;
+export type OpenAnswer =
+  | { readonly ok: true; readonly plan: Plan | null; readonly cards: readonly Card[]; readonly clinic: Clinic | null }
+  | Refusal;
 
 /** The problems of a refusal; a defect of the engine is said as one, with no place. */
 export function problemsOf(refusal: Refusal): readonly Problem[] {

@@ -61,12 +61,17 @@ def test_a_plan_that_cannot_be_meant_gives_problems_by_path():
     assert [problem["path"] for problem in answer["problems"]] == [["gap_mm"], ["increments", 0, "thickness_mm"]]
 
 
-def test_reading_a_good_file_gives_its_kind_and_data():
+def opened(name, text, cards=(), clinic=None):
+    return ask(do="open", files=[{"name": name, "text": text}], cards=list(cards), clinic=clinic)
+
+
+def test_opening_a_good_file_gives_its_data():
     for path in sorted(EXAMPLE.rglob("*.yaml")):
-        answer = ask(do="read", name=path.name, text=path.read_text(encoding="utf-8"))
-        assert answer["ok"] is True
-        assert answer["kind"] == answer["data"]["kind"]
-        assert answer["data"] == example(path.relative_to(EXAMPLE).as_posix())
+        answer = opened(path.name, path.read_text(encoding="utf-8"), example_cards(), example("clinic.yaml"))
+        data = example(path.relative_to(EXAMPLE).as_posix())
+        kind = data["kind"] if data["kind"] in {"plan", "clinic"} else "cards"
+        nothing = {"ok": True, "plan": None, "cards": [], "clinic": None}
+        assert answer == {**nothing, kind: [data] if kind == "cards" else data}
 
 
 @pytest.mark.parametrize(
@@ -81,8 +86,8 @@ def test_reading_a_good_file_gives_its_kind_and_data():
         ("", 1, ""),
     ],
 )
-def test_reading_a_bad_file_gives_placed_problems(text, line, says):
-    answer = ask(do="read", name="a.yaml", text=text)
+def test_opening_a_bad_file_gives_placed_problems(text, line, says):
+    answer = opened("a.yaml", text)
     assert answer["ok"] is False
     problem = answer["problems"][0]
     assert (problem["file"], problem["line"]) == ("a.yaml", line)
@@ -92,16 +97,49 @@ def test_reading_a_bad_file_gives_placed_problems(text, line, says):
     assert all(len(entry["shown"]) < 2000 for entry in answer["problems"])
 
 
+def files(**texts):
+    return [{"name": f"{name}.yaml", "text": text} for name, text in texts.items()]
+
+
+def test_files_opened_together_are_read_against_each_other():
+    lamp = next(card for card in CARDS if card["kind"] == "lamp")
+    brought = {**lamp, "id": "borrowed", "title": "Borrowed"}
+    plan = edited(PLAN, {"lamp/card": "borrowed"})
+    answer = ask(do="open", files=files(plan=json.dumps(plan), lamp=json.dumps(brought)), cards=CARDS)
+    assert (answer["plan"], answer["cards"]) == (plan, [brought])
+    alone = problem_of(ask(do="open", files=files(plan=json.dumps(plan, indent=1)), cards=CARDS))
+    assert 'no lamp card has the id "borrowed"' in alone["message"]
+    assert (alone["file"], alone["line"] > 1) == ("plan.yaml", True)
+    assert '"borrowed"' in alone["text"]
+
+
+def test_a_card_in_a_file_takes_the_place_of_a_held_one():
+    lamp = next(card for card in CARDS if card["kind"] == "lamp")
+    answer = ask(do="open", files=files(lamp=json.dumps({**lamp, "title": "Newer"})), cards=CARDS)
+    assert answer["cards"][0]["title"] == "Newer"
+
+
+def test_all_that_is_wrong_with_several_files_is_told_at_once():
+    plan = json.dumps(PLAN)
+    answer = ask(do="open", files=files(a=plan, b=plan, c="kind: rule\n", d="kind: lamp\nid: d\n"), cards=CARDS)
+    assert answer["ok"] is False
+    told = {problem["file"]: problem["message"] for problem in answer["problems"]}
+    assert set(told) == {"b.yaml", "c.yaml", "d.yaml"}
+    assert told["b.yaml"] == "a second plan among the files; open one plan at a time, with as many cards as it needs"
+    assert told["c.yaml"].startswith("a rule cannot be opened here")
+
+
 @pytest.mark.parametrize("data", [PLAN, *CARDS, *map(example_plan, PLANS), *example_cards()], ids=lambda d: d["title"])
 def test_what_is_written_is_read_back_as_it_was(data):
     text = ask(do="write", data=data)["text"]
-    assert ask(do="read", name="written.yaml", text=text)["data"] == data
+    answer = opened("written.yaml", text, [*CARDS, *example_cards()], example("clinic.yaml"))
+    assert answer["plan"] == data if data["kind"] == "plan" else answer["cards"] == [data]
 
 
 @pytest.mark.parametrize("title", ["no", "12:30", "1e-3", "2026-11-30", "a: b", "# c", "- d", "Zähne 歯", "{x}", "'"])
 def test_titles_that_yaml_could_take_for_something_else_come_back(title):
     text = ask(do="write", data={**PLAN, "title": title})["text"]
-    assert ask(do="read", name="written.yaml", text=text)["data"]["title"] == title
+    assert opened("written.yaml", text, CARDS)["plan"]["title"] == title
 
 
 @given(st.text(st.characters(codec="utf-8", exclude_categories=["Cc", "Cs"]), min_size=1, max_size=12))
@@ -127,8 +165,8 @@ JSON = st.recursive(
     max_leaves=6,
 )
 REQUESTS = st.fixed_dictionaries(
-    {"do": st.one_of(st.sampled_from(["start", "check", "read", "write"]), JSON)},
-    optional={"plan": JSON, "cards": JSON, "clinic": JSON, "on": JSON, "name": JSON, "text": JSON, "data": JSON},
+    {"do": st.one_of(st.sampled_from(["start", "check", "open", "write"]), JSON)},
+    optional={"plan": JSON, "cards": JSON, "clinic": JSON, "on": JSON, "files": JSON, "data": JSON},
 )
 
 
@@ -144,7 +182,7 @@ def answers(text):
 @tried("[" * 100_000)
 @tried('{"do": "write", "data": ' + "[" * 900 + "]" * 900 + "}")
 @tried('{"do": "write", "data": {"a": ' + "9" * 5000 + "}}")
-@tried('{"do": "read", "name": "\\ud800", "text": "a: 1"}')
+@tried('{"do": "open", "files": [{"name": "\\ud800", "text": "a: 1"}]}')
 @tried('{"do": "write", "data": {"a": "\\ud800"}}')
 @tried('{"do": "\\ud800"}')
 def test_whatever_text_it_gets_it_answers(text):

@@ -22,6 +22,11 @@ _READERS: Final[Mapping[str, Callable[[Document], Lamp | Composite | Layer]]] = 
 CARD_KINDS: Final = tuple(_READERS)
 
 
+def read_card(document: Document) -> Lamp | Composite | Layer:
+    """A card of any kind as a record. Refused where it cannot be meant."""
+    return _READERS[document.data["kind"]](document)
+
+
 class Cards:
     """The cards at hand. A card is turned into a record when a plan first asks for it.
 
@@ -73,7 +78,7 @@ class Cards:
             known = [known_id for known_kind, known_id in self._documents if known_kind == kind]
             unknown_card(asked_by, path, kind, card_id, known)
         if key not in self._records:
-            self._records[key] = _READERS[kind](self._documents[key])
+            self._records[key] = read_card(self._documents[key])
         return self._records[key]
 
 

@@ -5,6 +5,8 @@ from typing import Final
 
 MESSAGES: Final[Mapping[str, str]] = {
     "kind-unknown": "{found} is no kind of file that is read here; the kinds are {kinds}",
+    "kind-not-opened": "a {found} cannot be opened here; what can is {kinds}",
+    "one-at-a-time": "a second {kind} among the files; open one {kind} at a time, with as many cards as it needs",
     "kind-other": "this is a {found}; a {wanted} is needed here",
     "missing-after-usual": 'missing key "{what}": neither the plan nor the clinic\'s usual values give it',
     "card-unknown": 'no {kind} card has the id "{id}"; those at hand are {known}',

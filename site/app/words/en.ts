@@ -3,6 +3,13 @@ import type { Mark } from "../types";
 
 const count = (n: number, one: string, many: string) => `${n} ${n === 1 ? one : many}`;
 
+const SIDES = {
+  below: (shown: string) => `below ${shown}`,
+  at_most: (shown: string) => `at ${shown} or less`,
+  above: (shown: string) => `above ${shown}`,
+  at_least: (shown: string) => `at ${shown} or more`,
+};
+
 export const en = {
   name: "Farside",
   marks: { stop: "Stop", revise: "Revise", open: "Open", watch: "Watch", clear: "Clear" } satisfies Record<
@@ -46,8 +53,6 @@ export const en = {
       `${count(n, "problem", "problems")}. Nothing was opened, and what was open is as it was.`,
     opened: (names: readonly string[]) => `Opened ${names.join(", ")}`,
     notText: "this file is not text in UTF-8",
-    twoPlans: "more than one plan was chosen; open one plan at a time, with as many cards as it needs",
-    notForHere: (kind: string) => `a file of kind ${kind} cannot be opened here; plans, cards and clinic values can`,
     waiting: "Files can be opened once the engine has started.",
   },
   panels: {
@@ -254,7 +259,7 @@ export const en = {
     refused: "This plan cannot be checked as it stands",
     notApplied: (n: number) => `${count(n, "rule does", "rules do")} not apply to this plan`,
     ruler: (label: string, shown: string, limits: readonly string[]) => `${label}: ${shown}. ${limits.join("; ")}.`,
-    limit: (mark: string, side: "below" | "above", shown: string) => `${mark} ${side} ${shown}`,
+    limit: (mark: string, side: keyof typeof SIDES, shown: string) => `${mark} ${SIDES[side](shown)}`,
     stale: "The plan has changed since; these are the last answer's.",
     strength: {
       standard: "standard",
