@@ -53,7 +53,7 @@ def _over_need(light: IncrementLight, dose: float | None) -> float | None:
 def _strongest(light: IncrementLight) -> float | None:
     arriving = [exposure.axis_mw_cm2 for exposure in light.exposures]
     known = [value for value in arriving if value is not None]
-    return max(known) if known and len(known) == len(arriving) else None
+    return max(known, default=0.0) if len(known) == len(arriving) else None
 
 
 def _radiant_exposure(light: IncrementLight) -> float | None:
@@ -83,7 +83,7 @@ def _spectrum_match(light: IncrementLight, row: MakerRow) -> float | None:
 
 def _cover(light: IncrementLight) -> float | None:
     if not light.exposures:
-        return None
+        return 0.0
     lit = zip(*(exposure.shares_across for exposure in light.exposures), strict=True)
     return share_lit(tuple(max(shares) for shares in lit), _COVERED)
 
@@ -100,6 +100,13 @@ def _shadow(subject: Subject) -> Value | None:
         left = min(left, shaded if light.exposure.tilt_deg > 0 else 0.0)
         right = min(right, shaded if light.exposure.tilt_deg < 0 else 0.0)
     return max(left, right)
+
+
+def _tip_distance_mm(subject: Subject) -> Value | None:
+    if subject.increment is None or subject.index is None:
+        return None
+    follows = subject.trace.plan.distance_after_mm(subject.index)
+    return max((light.tip_distance_mm for light in subject.increment.exposures), default=follows)
 
 
 def _unfilled_above_mm(subject: Subject) -> float:
@@ -242,7 +249,7 @@ OF_INCREMENT: Final[tuple[Quantity, ...]] = (
         "increment",
         "mm",
         "tip to its surface, the largest of its exposures",
-        _of(lambda light: max((exposure.tip_distance_mm for exposure in light.exposures), default=None)),
+        _tip_distance_mm,
         formula="gap_mm + cavity depth − all that is filled once it is placed",
     ),
     Quantity(
