@@ -1,6 +1,6 @@
 """From a text to data with places, and from a schema's errors to placed messages; knows no domain."""
 
-from .document import Document, read_document
-from .problems import Path, Place, Problem, Refused, printable
+from farside.reading.document import Document, read_document
+from farside.reading.problems import Path, Place, Problem, Refused, printable
 
 __all__ = ["Document", "Path", "Place", "Problem", "Refused", "printable", "read_document"]

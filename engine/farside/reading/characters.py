@@ -3,8 +3,8 @@
 import re
 from typing import Final
 
-from .faults import Fault
-from .problems import named_character
+from farside.reading.faults import Fault
+from farside.reading.problems import named_character
 
 LARGEST: Final = 1_000_000
 BYTE_ORDER_MARK: Final = "\ufeff"

@@ -4,12 +4,12 @@ import math
 from collections.abc import Mapping
 from typing import Any, Final
 
-from .characters import BYTE_ORDER_MARK, LARGEST, is_half, lines_of, text_of, unwelcome_in_text
-from .faults import Fault
-from .json_text import NotJson, grow_from_json
-from .messages import MESSAGES
-from .problems import Path, Place, Problem, Refused, named_character, path_text, shown_line
-from .tree import DEEPEST, MOST_VALUES, At, Tree, copy_of, plain_word, type_word
+from farside.reading.characters import BYTE_ORDER_MARK, LARGEST, is_half, lines_of, text_of, unwelcome_in_text
+from farside.reading.faults import Fault
+from farside.reading.json_text import NotJson, grow_from_json
+from farside.reading.messages import MESSAGES
+from farside.reading.problems import Path, Place, Problem, Refused, named_character, path_text, shown_line
+from farside.reading.tree import DEEPEST, MOST_VALUES, At, Tree, copy_of, plain_word, type_word
 
 _LEAVES: Final = (str, int, float, bool, type(None))
 

@@ -5,8 +5,8 @@ import re
 from bisect import bisect_right
 from typing import Final
 
-from .faults import Fault
-from .tree import At, Tree
+from farside.reading.faults import Fault
+from farside.reading.tree import At, Tree
 
 _TOKEN: Final = re.compile(
     r"(?P<mark>[{}\[\],:])"

@@ -7,10 +7,10 @@ from functools import cache
 from itertools import islice
 from typing import Any, Final
 
-from .document import Document
-from .nearest import nearest
-from .problems import Refused
-from .schema_errors import problems_of
+from farside.reading.document import Document
+from farside.reading.nearest import nearest
+from farside.reading.problems import Refused
+from farside.reading.schema_errors import problems_of
 
 __all__ = ["check_by", "check_schema", "nearest", "validator_of"]
 

@@ -5,12 +5,12 @@ from collections.abc import Iterable, Iterator, Mapping
 from itertools import islice
 from typing import Any, Final
 
-from .document import Document
-from .messages import MESSAGES
-from .nearest import nearest
-from .problems import Path, Problem, path_text
-from .schema_words import ANSWERS, choices_word, looks_like_number, range_word, shown_value, wanted_word
-from .tree import type_word
+from farside.reading.document import Document
+from farside.reading.messages import MESSAGES
+from farside.reading.nearest import nearest
+from farside.reading.problems import Path, Problem, path_text
+from farside.reading.schema_words import ANSWERS, choices_word, looks_like_number, range_word, shown_value, wanted_word
+from farside.reading.tree import type_word
 
 RANGE: Final = frozenset({"minimum", "maximum", "exclusiveMinimum", "exclusiveMaximum"})
 MOST_KEYS: Final = 50

@@ -4,7 +4,7 @@ import re
 from collections.abc import Mapping
 from typing import Any, Final, NamedTuple
 
-from .tree import plain_word
+from farside.reading.tree import plain_word
 
 _TYPES: Final = {
     "string": "text",

@@ -2,10 +2,10 @@
 
 from typing import Any, Final, NoReturn
 
-from .characters import is_half, unwelcome_in_text, whole_text
-from .faults import Fault
-from .problems import Path, named_character, path_text, printable
-from .scalars import LONGEST_NUMBER, NotFinite, Scalar, TooLong, resolved
+from farside.reading.characters import is_half, unwelcome_in_text, whole_text
+from farside.reading.faults import Fault
+from farside.reading.problems import Path, named_character, path_text, printable
+from farside.reading.scalars import LONGEST_NUMBER, NotFinite, Scalar, TooLong, resolved
 
 At = tuple[int, int]
 

@@ -10,8 +10,8 @@ from typing import Any, Final
 
 import yaml
 
-from .faults import Fault
-from .tree import At, Tree
+from farside.reading.faults import Fault
+from farside.reading.tree import At, Tree
 
 _PURE: Final[Any] = yaml.SafeLoader
 _QUICK: Final[Any] = getattr(yaml, "CSafeLoader", None)
