@@ -51,7 +51,8 @@ export interface Finding {
   readonly title: string;
   readonly topic: string;
   readonly finding: Mark;
-  readonly level_word: string;
+  /** Whether it stands whatever the plan. */
+  readonly standing: boolean;
   readonly about: string;
   readonly where: Where;
   readonly measured: Measured | null;

@@ -208,3 +208,14 @@ def test_paper_holds_the_verdict_and_the_findings(page: Page) -> None:
     expect(page.locator(".finding").first).to_be_visible()
     expect(page.locator(".foot")).to_be_visible()
     expect(page.locator(".panels")).to_be_hidden()
+
+
+def test_what_the_cards_leave_open_is_said_once_and_folded(context: BrowserContext, home: str) -> None:
+    page = opened(context, home)
+    standing = page.locator(".standing-ones")
+    sentence = standing.get_by_text("Assumed: how Universal, medium passes light.")
+    expect(sentence).to_have_count(1)
+    expect(sentence).to_be_hidden()
+    standing.locator("summary").first.click()
+    expect(sentence).to_be_visible()
+    expect(standing.locator(".do")).to_have_text(re.compile("Measure one disc"))

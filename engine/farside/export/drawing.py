@@ -6,10 +6,12 @@ from typing import Any, Final
 from farside.protocol.report import Report
 from farside.protocol.rule import GRADES
 from farside.protocol.wording import shown
+from farside.quantities.registry import visible
 from farside.trace.light import IncrementLight, LightTrace
 
 _SLICES: Final = 24
 _DIGITS: Final = 4
+_SHOWN_DIGITS: Final = visible("increment")["far_dose_ratio"].digits
 
 
 def as_drawing(report: Report) -> dict[str, Any]:
@@ -46,7 +48,7 @@ def _increment(report: Report, index: int) -> dict[str, Any]:
         "top_mm": round(bottom_mm - light.increment.thickness_mm, _DIGITS),
         "bottom_mm": round(bottom_mm, _DIGITS),
         "far_share": ratio,
-        "far_shown": None if ratio is None else shown(ratio, against=[1.0]),
+        "far_shown": None if ratio is None else shown(ratio, against=[1.0], digits=_SHOWN_DIGITS),
         "finding": min(grades, key=GRADES.index, default="clear"),
         "profile": [] if ratio is None else profile,
         "short_from_mm": None if ratio is None else _short_from_mm(profile),

@@ -14,16 +14,16 @@ _WIDTH: Final = 100
 _INDENT: Final = 10
 _LONGEST: Final = 400
 _SHOWN_DIGITS: Final = 8
-# Said once a plan, however many increments they touch.
-_ONCE: Final = frozenset({"assumed-optics"})
 
 
 def as_text(report: Report) -> str:
     """A report as text, ending in a line break; what turns the direction of writing in a title is shown as its code."""
     lines = [_head(report), "", f"{MARKS[report.verdict]} {report.verdict_says()}", ""]
-    for finding in _once(report.findings):
-        if finding.finding != "clear":
+    for finding in report.findings:
+        if finding.finding != "clear" and not finding.standing:
             lines += [*_finding(finding), ""]
+    for finding in _once(finding for finding in report.findings if finding.standing):
+        lines += [*_standing(finding), ""]
     lines += [_labelled("clear", report.clear_says()), "", *wrap(text("caution"), _WIDTH)]
     return "".join(f"{printable(line, _LONGEST)}\n" for line in lines)
 
@@ -77,12 +77,11 @@ def _wrapped(words: str, head: str) -> list[str]:
     return wrap(words, _WIDTH, initial_indent=head, subsequent_indent=" " * _INDENT, break_on_hyphens=False)
 
 
-def _once(findings: Iterable[Finding]) -> Iterator[Finding]:
-    """Findings without the repeats of those that need saying once: of one rule, grade and composite."""
-    said: set[tuple[object, ...]] = set()
-    for finding in findings:
-        key = (finding.rule.id, finding.finding, finding.where["composite"])
-        if finding.rule.id in _ONCE and key in said:
-            continue
-        said.add(key)
-        yield finding
+def _standing(finding: Finding) -> Iterator[str]:
+    yield from _labelled(finding.finding, finding.says).splitlines()
+    yield from _indented(f"{finding.do} · {finding.rule.id}")
+
+
+def _once(findings: Iterable[Finding]) -> Iterable[Finding]:
+    """Of findings that say the same, the first."""
+    return list({finding.says: finding for finding in findings}.values())

@@ -51,6 +51,11 @@ class Finding:
     do: str
     measured: Measured | None
 
+    @property
+    def standing(self) -> bool:
+        """Whether it stands whatever the plan, and so need be said only once."""
+        return self.rule.standing and self.finding == "watch"
+
     def as_data(self) -> dict[str, Any]:
         """The finding as the report's JSON has it."""
         return {
@@ -58,6 +63,7 @@ class Finding:
             "title": self.rule.title,
             "topic": self.rule.topic,
             "finding": self.finding,
+            "standing": self.standing,
             "about": self.rule.about,
             "where": dict(self.where),
             "where_says": self.where_says,
@@ -174,7 +180,7 @@ def _measured(rule: Rule, outcome: Outcome, values: SubjectValues) -> Measured |
     return Measured(
         name=name,
         value=float(values.get(name)),
-        shown=shown(values.get(name), quantity.unit, [value for value, _, _ in limits.values()]),
+        shown=shown(values.get(name), quantity.unit, [value for value, _, _ in limits.values()], quantity.digits),
         unit=quantity.unit,
         label=quantity.label,
         against=tuple(

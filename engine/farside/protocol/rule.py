@@ -37,7 +37,11 @@ class Level:
 
 @dataclass(frozen=True, slots=True)
 class Rule:
-    """One requirement. `data` is the file itself, for pages and digest."""
+    """One requirement.
+
+    A watch of a `standing` rule is about a card and stands whatever the plan. `data` is the file itself, for pages and
+    digest.
+    """
 
     id: str
     title: str
@@ -52,6 +56,7 @@ class Rule:
     caution: str | None
     sources: tuple[str, ...]
     strength: str
+    standing: bool
     data: Mapping[str, Any]
 
     def values_of_limits(self) -> dict[str, Any]:
@@ -102,6 +107,7 @@ def rule_of(data: Mapping[str, Any], topic: str) -> Rule:
         caution=data.get("caution"),
         sources=tuple(dict.fromkeys(cited)),
         strength=min(strengths, key=STRENGTHS.index),
+        standing=data.get("standing", False),
         data=data,
     )
 

@@ -31,12 +31,12 @@ def filled(words: str, values: Mapping[str, str]) -> str:
 def with_unit(value: Any, quantity: Quantity | None, against: Sequence[float] = ()) -> str:
     """A value as words show it, its unit behind it."""
     unit = quantity.unit if quantity else ""
-    text = shown(value, unit, against)
+    text = shown(value, unit, against, quantity.digits if quantity else _DIGITS)
     return f"{text} {unit}" if unit and unit != "°" else f"{text}{unit}"
 
 
-def shown(value: Any, unit: str = "", against: Sequence[float] = ()) -> str:
-    """A value in figures: 3 digits, or as many more as tell it from each limit that it is held against.
+def shown(value: Any, unit: str = "", against: Sequence[float] = (), digits: int = _DIGITS) -> str:
+    """A value in figures: so many digits, or as many more as tell it from each limit that it is held against.
 
     Examples
     --------
@@ -51,7 +51,6 @@ def shown(value: Any, unit: str = "", against: Sequence[float] = ()) -> str:
         return ", ".join(map(str, value))
     if not isinstance(value, int | float):
         return str(value)
-    digits = _DIGITS
     while digits < _MOST_DIGITS and any(
         limit != value and float(f"{limit:.{digits}g}") == float(f"{value:.{digits}g}") for limit in against
     ):

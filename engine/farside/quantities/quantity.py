@@ -12,6 +12,8 @@ from farside.quantities.subject import About, Subject
 Value = float | str | bool
 
 _DIGITS: Final = 6
+_MODEL_DIGITS: Final = 2
+_ENTERED_DIGITS: Final = 3
 _UNIT_WORDS: Final[Mapping[str, list[str]]] = {
     "mm": ["mm"], "s": ["s"], "days": ["days"], "lx": ["lx"], "°": ["deg"], "°C": ["c"],
     "mW/cm²": ["mw", "cm2"], "J/cm²": ["j", "cm2"],
@@ -34,6 +36,11 @@ class Quantity:
     reads: tuple[str, ...] = ()
     reach: Reach | None = None
     formula: str = ""
+
+    @property
+    def digits(self) -> int:
+        """To how many digits it is shown: what the model computes is not known to more than two."""
+        return _MODEL_DIGITS if self.reach is not None else _ENTERED_DIGITS
 
     @property
     def label(self) -> str:

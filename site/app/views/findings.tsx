@@ -46,7 +46,8 @@ export function Refusal({ problems, past }: { readonly problems: readonly Proble
 
 function Told({ report, pages }: { readonly report: Report; readonly pages: (rule: string) => string }) {
   const clear = report.findings.filter((finding) => finding.finding === "clear");
-  const rest = report.findings.filter((finding) => finding.finding !== "clear");
+  const standing = report.findings.filter((finding) => finding.standing);
+  const rest = report.findings.filter((finding) => finding.finding !== "clear" && !finding.standing);
   return (
     <>
       <ol class="list">
@@ -56,6 +57,7 @@ function Told({ report, pages }: { readonly report: Report; readonly pages: (rul
           </li>
         ))}
       </ol>
+      {standing.length > 0 && <Standing groups={grouped(standing)} pages={pages} />}
       {clear.length > 0 && (
         <details class="clear-ones">
           <summary>
@@ -75,17 +77,39 @@ function Told({ report, pages }: { readonly report: Report; readonly pages: (rul
   );
 }
 
+/** What is so whatever the plan, because a card leaves it open: one line folded, with the remedy inside. */
+function Standing({
+  groups,
+  pages,
+}: {
+  readonly groups: readonly Group[];
+  readonly pages: (rule: string) => string;
+}) {
+  return (
+    <details class="standing-ones">
+      <summary>
+        <MarkShape mark="watch" /> {words.findings.standing(groups.length)}
+      </summary>
+      <ol class="list">
+        {groups.map((group) => (
+          <li key={group.key}>
+            <One group={group} pages={pages} />
+          </li>
+        ))}
+      </ol>
+    </details>
+  );
+}
+
 function One({ group, pages }: { readonly group: Group; readonly pages: (rule: string) => string }) {
   const { findings, mark } = group;
   const [first] = findings;
   const page = pages(first.rule);
-  const missing = distinct(findings.flatMap((finding) => finding.missing));
   return (
     <article class={`finding ${mark}`}>
       <MarkWord mark={mark} />
       <div class="told">
         <Sayings says={distinct(findings.map((finding) => finding.says))} />
-        {missing.length > 0 && <p class="missing">{words.findings.missing(missing)}</p>}
         <Ruler findings={findings} />
         {distinct(findings.map((finding) => finding.do)).map((text) => (
           <p key={text} class="do">

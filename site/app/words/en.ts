@@ -253,7 +253,7 @@ export const en = {
     /** Bodies that are written in capitals. */
     bodies: ["iso", "fdi", "icnirp", "cie"],
     rule: "The rule and its source",
-    missing: (names: readonly string[]) => `Not known: ${names.join(", ")}`,
+    standing: (n: number) => `${count(n, "thing", "things")} to know of the cards, whatever the plan`,
     caution: "Caution",
     changed: "Changed by the clinic's protocol",
     refused: "This plan cannot be checked as it stands",

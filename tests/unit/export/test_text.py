@@ -101,3 +101,18 @@ def test_markup_in_a_title_is_only_text():
 
 def test_dates_as_people_say_them():
     assert spoken_date(date(2026, 11, 3)) == "3 November 2026"
+
+
+def test_what_stands_whatever_the_plan_is_said_once_with_its_remedy(deep_box):
+    assert deep_box.count("Assumed: how Universal, medium passes light.") == 1
+    blocks = deep_box.split("\n\n")
+    told = next(index for index, block in enumerate(blocks) if "Assumed: how" in block)
+    assert "Measure one disc" in blocks[told]
+    assert blocks[told + 1].startswith("○ clear"), "after all that the plan itself gives"
+
+
+def test_a_revise_of_a_standing_rule_is_told_in_its_place():
+    thick = edited(example_plan("deep-box"), {"increments/0/thickness_mm": 2.6, "increments/1/thickness_mm": 1.4})
+    text = text_of(thick)
+    assert "thicker than its maker's row" in " ".join(text.split())
+    assert text.index("thicker than") < text.index("● watch")

@@ -222,3 +222,10 @@ def test_placeholders_without_a_value_say_so():
     assert filled("{a} and {b.c}", {"a": "1"}) == "1 and not known"
     assert of_input("composite.optics") == "how the composite passes light"
     assert of_input("what.ever") == '"what.ever"'
+
+
+def test_what_the_model_computes_is_shown_to_two_digits_and_what_was_entered_to_three():
+    computed, entered = visible("increment")["far_dose_ratio"], visible("increment")["thickness_mm"]
+    assert with_unit(0.77329, computed) == "0.77"
+    assert with_unit(0.9991, computed, against=[1.0]) == "0.999"
+    assert with_unit(1.25, entered) == "1.25 mm"
