@@ -6,7 +6,7 @@ from functools import partial
 from typing import Final
 
 from farside.physics.light.beam import off_axis_share, on_axis_share
-from reference.checks import Check
+from reference.checks import Check, Figure, Group
 
 TIP_MM: Final = 8.0
 PLACES: Final = tuple(
@@ -40,6 +40,8 @@ def _integrated() -> Iterator[Check]:
     for distance, offset, spread in PLACES:
         yield Check(
             id=f"beam-{distance:g}-{offset:g}-{spread:g}",
+            topic="beam",
+            group="beam-integrated",
             source="SciPy, dblquad",
             says=f"share {distance:g} mm under an 8 mm tip, {offset:g} mm off the axis, spread exponent {spread:g}",
             published=partial(summed_over_disc, distance, offset, spread),
@@ -50,6 +52,8 @@ def _integrated() -> Iterator[Check]:
         if offset == 0.0:
             yield Check(
                 id=f"beam-on-axis-{distance:g}-{spread:g}",
+                topic="beam",
+                group="beam-on-axis",
                 source="SciPy, dblquad",
                 says=f"share {distance:g} mm under an 8 mm tip on the axis, spread exponent {spread:g}",
                 published=partial(summed_over_disc, distance, 0.0, spread),
@@ -64,6 +68,8 @@ def _closed() -> Iterator[Check]:
         for offset in (0.0, 2.0, 4.0, 6.0):
             yield Check(
                 id=f"beam-closed-{distance:g}-{offset:g}",
+                topic="beam",
+                group="beam-closed",
                 source="view factor of a disc",
                 says=f"share {distance:g} mm under a Lambertian 8 mm tip, {offset:g} mm off the axis",
                 published=partial(closed, distance, offset),
@@ -74,4 +80,10 @@ def _closed() -> Iterator[Check]:
             )
 
 
+GROUPS: Final = (
+    Group("beam-integrated", "Share that arrives under an 8 mm tip, on and off the axis, spread exponents 0 to 14"),
+    Group("beam-on-axis", "Share that arrives on the axis of an 8 mm tip, spread exponents 0 to 14"),
+    Group("beam-closed", "Share that arrives under a Lambertian 8 mm tip, on and off the axis"),
+)
+FIGURES: Final[tuple[Figure, ...]] = ()
 CHECKS: Final = (*_integrated(), *_closed())

@@ -12,7 +12,7 @@ from farside.physics.light.initiators import Initiator, dose_weight
 from farside.physics.light.paste import Paste, absorption_at, scattering_at
 from farside.physics.light.transport import half_space_fluence
 from reference import tables
-from reference.checks import Check
+from reference.checks import Check, Figure, Group
 
 BLUE: Final = (("camphorquinone", 0.005),)
 BOTH: Final = (("camphorquinone", 0.001), ("mono-acylphosphine-oxide", 0.006))
@@ -56,6 +56,8 @@ def _bands() -> Iterator[Check]:
         for depth in DEPTHS_MM:
             yield Check(
                 id=f"band-{group}-{peak:g}-{width:g}-{count}-{depth:g}",
+                topic="paste",
+                group="band-nodes",
                 source="SciPy, simpson",
                 says=f"dose {depth:g} mm deep in the usual {group} paste, band of {width:g} nm at {peak:g} nm",
                 published=partial(_densely, paste, depth, peak, width),
@@ -84,6 +86,8 @@ def _edges() -> Iterator[Check]:
         for length_mm in (0.7, 1.4):
             yield Check(
                 id=f"edge-{at_mm:g}-{length_mm:g}",
+                topic="arithmetic",
+                group="edge-smoothing",
                 source="SciPy, dblquad",
                 says=f"beam smoothed over {length_mm:g} mm, {at_mm:g} mm off the axis, 4 mm under an 8 mm tip, m 3.5",
                 published=partial(_smoothed_densely, at_mm, length_mm),
@@ -106,12 +110,20 @@ def _photons_counted(wavelength_nm: float) -> float:
     return photon_energy_kj_mol(469.0) / dose_weight(((even, 1.0),), wavelength_nm, even)
 
 
+GROUPS: Final = (
+    Group("band-nodes", "Dose in usual pastes under a whole band, against that of its few nodes"),
+    Group("edge-smoothing", "A beam's fall to the side smoothed over 0.7 and 1.4 mm, against dense integration"),
+    Group("photon-energy", "Energy of a mole of photons, 365 to 470 nm, as the dose weight counts them"),
+)
+FIGURES: Final[tuple[Figure, ...]] = ()
 CHECKS: Final = (
     *_bands(),
     *_edges(),
     *(
         Check(
             id=f"photon-{wavelength:g}",
+            topic="arithmetic",
+            group="photon-energy",
             source="SciPy, constants",
             says=f"energy of a mole of photons of {wavelength:g} nm, as the dose weight counts them",
             published=partial(photon_energy_kj_mol, wavelength),

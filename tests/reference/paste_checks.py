@@ -8,7 +8,7 @@ from farside.physics.light.bands import band_nodes
 from farside.physics.light.paste import absorption_at, scattering_at
 from farside.physics.light.transport import slab
 from reference import tables
-from reference.checks import Check
+from reference.checks import Check, Figure, Group
 
 CAMPHORQUINONE: Final = ("camphorquinone", 0.005)
 THICKNESSES_MM: Final = tuple(step / 10.0 for step in range(1, 41, 3))
@@ -42,20 +42,25 @@ def apparent_per_mm(group: str, thickness_mm: float) -> float:
     return -math.log(passed(group, thickness_mm, 460.0, 20.0)) / thickness_mm
 
 
+GROUPS: Final[tuple[Group, ...]] = ()
+FIGURES: Final[tuple[Figure, ...]] = ()
 CHECKS: Final = (
     Check(
         id="violet-against-blue",
+        topic="paste",
         source="harlow-2016",
         says="violet attenuated 0.43 to 0.68 per mm more than blue over 4 mm",
         published=0.555,
         unit="1/mm",
         band=0.02,
+        kind="set-by",
         sets=("own_absorption.slope",),
         how_sure="seen",
         computed=violet_over_blue_per_mm,
     ),
     Check(
         id="decay-looks-exponential",
+        topic="paste",
         source="harlow-2016",
         says="from 0.1 to 4 mm the decay fits an exponential with an r² above 0.98",
         published=0.99,
@@ -67,22 +72,27 @@ CHECKS: Final = (
     ),
     Check(
         id="apparent-attenuation-2-mm",
+        topic="paste",
         source="oper-dent-2018-e19",
         says="conventional composites, 2 and 4 mm: apparently 0.90 to 1.24 per mm; the usual medium paste, 2 mm",
         published=1.07,
         unit="1/mm",
         band=0.17,
         band_is="absolute",
-        how_sure="plausibility",
+        kind="plausibility",
+        note="The shades of the source are not known here.",
+        how_sure="seen",
         computed=partial(apparent_per_mm, "medium", 2.0),
     ),
     Check(
         id="tooth-attenuation",
+        topic="tooth",
         source="uusitalo-2016",
         says="37.6 and 6.2 mW/cm² behind 5.6 and 8.2 mm of whole tooth",
         published=math.log(37.6 / 6.2) / (8.2 - 5.6),
         unit="1/mm",
         band=0.01,
+        kind="set-by",
         sets=("tooth.attenuation_per_mm",),
         how_sure="seen",
         computed=lambda: float(tables.row("tissues", "tooth")["attenuation_per_mm"]),

@@ -9,7 +9,7 @@ from farside.physics.eyes.hazard import blue_light_weight, day_limit_s, reflecte
 from farside.physics.light.initiators import molar_absorption
 from farside.physics.room.window import working_window_s
 from reference import tables
-from reference.checks import Check
+from reference.checks import Check, Figure, Group
 
 if TYPE_CHECKING:
     from numpy.typing import NDArray
@@ -73,10 +73,15 @@ def _room_lights() -> Iterator[Check]:
             ),
         }
         for place, (what, (worked_out, tabled)) in enumerate(values.items()):
+            name = ("blue", "weighted", "yellow")[place]
             yield Check(
-                id=f"room-{light['id']}-{('blue', 'weighted', 'yellow')[place]}",
-                source=f"CIE illuminant {cie} in colour-science",
-                says=f"1 000 lx, {what}",
+                id=f"room-{light['id']}-{name}",
+                topic="room",
+                group=f"room-light-{name}",
+                source="cie-illuminants",
+                says=f"1 000 lx of CIE illuminant {cie}, {what}",
+                kind="set-by",
+                sets=("room-lights",),
                 published=worked_out,
                 unit="mW/cm²",
                 band=0.003,
@@ -88,6 +93,10 @@ def _eye_weights() -> Iterator[Check]:
     for wavelength in (500.0, 525.0, 550.0, 575.0, 600.0):
         yield Check(
             id=f"blue-light-weight-{wavelength:g}",
+            topic="eyes",
+            group="blue-light-weight",
+            kind="set-by",
+            sets=("hazard-weights",),
             source="icnirp-2013",
             says=f"from 500 to 600 nm the weight is 10^((450 - nm)/50); at {wavelength:g} nm",
             published=10.0 ** ((450.0 - wavelength) / 50.0),
@@ -107,11 +116,19 @@ def _radiance(irradiance_mw_cm2: float, reflectance_share: float, wavelength_nm:
     return reflected_radiance_w_m2_sr(irradiance_mw_cm2, reflectance_share, weight)
 
 
+GROUPS: Final = (
+    Group("room-light-blue", "Blue irradiance of 1 000 lx of each room light"),
+    Group("room-light-weighted", "What 1 000 lx of each room light are worth to camphorquinone"),
+    Group("room-light-yellow", "The same behind a yellow filter whose edge lies at 500 nm"),
+    Group("blue-light-weight", "Blue-light weights from 500 to 600 nm"),
+)
+FIGURES: Final[tuple[Figure, ...]] = ()
 CHECKS: Final = (
     *_room_lights(),
     *_eye_weights(),
     Check(
         id="working-time-in-clinic",
+        topic="room",
         source="lane-1998",
         says="23 composites: 162 s at 8 000 lx, 54 s in a clinic at 24 000 lx",
         published=54.0,
@@ -122,7 +139,8 @@ CHECKS: Final = (
     ),
     Check(
         id="tooth-radiance",
-        source="icnirp-2013",
+        topic="arithmetic",
+        source="worked by hand",
         says="weight 0.80 at 460 nm; 1 000 mW/cm² on a matt tooth that sends back 0.4: 1 018.6",
         published=1018.6,
         unit="W/(m² sr)",
@@ -131,23 +149,26 @@ CHECKS: Final = (
     ),
     Check(
         id="tooth-day-limit",
-        source="icnirp-2013",
+        topic="arithmetic",
+        source="worked by hand",
         says="10^6 J/(m² sr) a day over 1 018.6 W/(m² sr): 981.7 s",
         published=981.7,
         unit="s",
         band=1e-4,
-        how_sure="seen",
         computed=partial(_day_limit_s, 1000.0, 0.4, 460.0),
     ),
     Check(
         id="tooth-day-limit-measured",
+        topic="eyes",
         source="price-2016",
         says="light thrown back from a tooth: about 11 minutes a day; the lamp's irradiance is not known here, "
         "1 000 mW/cm² is taken",
         published=660.0,
         unit="s",
         band=0.5,
-        how_sure="plausibility",
+        kind="plausibility",
+        note="1 000 mW/cm² and a reflectance of 0.4 are taken.",
+        how_sure="seen",
         computed=partial(_day_limit_s, 1000.0, 0.4, 460.0),
     ),
 )

@@ -9,7 +9,7 @@ from typing import Final
 from farside.physics.light.layers import delta_scaled, layer
 from farside.physics.light.streams import streams
 from farside.physics.light.transport import Slab, half_space_fluence, slab, slab_fluence
-from reference.checks import Check
+from reference.checks import Check, Figure, Group, Point
 
 DATA: Final = Path(__file__).parent / "data"
 OPTICS: Final = ("absorption_per_mm", "reduced_scattering_per_mm", "refractive_index", "anisotropy")
@@ -46,6 +46,11 @@ def _slabs() -> Iterator[Check]:
         for what, band, band_is in bands:
             yield Check(
                 id=f"slab-{what.replace('_', '-')}-{name}",
+                topic="transport",
+                group=f"slab-{what.replace('_', '-')}",
+                point=Point(f"slab-{what}", f"index {row['refractive_index']:g}, g {row['anisotropy']:g}", row[what])
+                if what in ("transmittance", "reflectance")
+                else None,
                 source="iadpython 0.5.3, 16 points",
                 says=f"{what}, {says}",
                 published=row[what],
@@ -66,6 +71,8 @@ def _matched_fluence() -> Iterator[Check]:
         yield Check(
             id="fluence-matched-"
             + "-".join(f"{value:g}" for value in (*optics[:2], row["thickness_mm"], row["depth_mm"])),
+            topic="transport",
+            group="fluence-matched",
             source="PythonicDISORT 1.8, 64 streams",
             says=f"fluence over irradiance at {row['depth_mm']:g} mm in a slab of {row['thickness_mm']:g} mm, index 1",
             published=row["fluence"],
@@ -87,13 +94,21 @@ def _stepped_fluence() -> Iterator[Check]:
         ends = (row["from_mm"], row["to_mm"])
         yield Check(
             id="fluence-stepped-" + "-".join(f"{value:g}" for value in (*optics, thickness or 0.0, ends[0])),
-            source="Monte Carlo, 1.6 million photons (tests/reference/data/fluence_stepped_make.py)",
+            topic="transport",
+            group="fluence-stepped",
+            point=Point("fluence-stepped", _series(optics, thickness), sum(ends) / 2.0),
+            source="Monte Carlo of our own, 1.6 million photons",
             says=f"fluence over irradiance from {ends[0]:g} to {ends[1]:g} mm in {where}, index 1.5",
             published=row["fluence"],
             unit="",
             band=0.02,
             computed=partial(_mean_fluence, ends, thickness, *optics),
         )
+
+
+def _series(optics: tuple[float, float], thickness_mm: float | None) -> str:
+    where = "half-space" if thickness_mm is None else f"slab of {thickness_mm:g} mm"
+    return f"{where}, absorption {optics[0]:g}, scattering {optics[1]:g} per mm"
 
 
 def _mean_fluence(ends: tuple[float, float], thickness_mm: float | None, *optics: float) -> float:
@@ -124,12 +139,26 @@ def _depth_slab(albedo: float, depth: float, anisotropy: float, index: float) ->
     return slab(depth, 1.0 - albedo, albedo * (1.0 - anisotropy), index, anisotropy)
 
 
+GROUPS: Final = (
+    Group("slab-transmittance", "Share of a beam that passes a slab in air"),
+    Group("slab-reflectance", "Share of a beam that a slab in air throws back"),
+    Group("slab-diffuse-transmittance", "Share of diffuse light that passes a slab in air"),
+    Group("slab-diffuse-reflectance", "Share of diffuse light that a slab in air throws back"),
+    Group("fluence-matched", "Fluence rate over irradiance inside slabs of index 1"),
+    Group("fluence-stepped", "Fluence rate over irradiance inside slabs and half-spaces of index 1.5"),
+)
+FIGURES: Final = (
+    Figure("slab-transmittance", "Slabs: transmittance", "16-point reference", "Farside", log_x=True, log_y=True),
+    Figure("slab-reflectance", "Slabs: reflectance", "16-point reference", "Farside"),
+    Figure("fluence-stepped", "Light inside a paste", "Depth, mm", "Fluence rate over irradiance", log_y=True),
+)
 CHECKS: Final = (
     *_slabs(),
     *_matched_fluence(),
     *_stepped_fluence(),
     Check(
         id="reflection-function",
+        topic="transport",
         source="van-de-hulst-1980",
         says="table 12: albedo 0.8, depth 2, isotropic: R(0.5, 1) = 0.28616",
         published=0.28616,
@@ -140,6 +169,7 @@ CHECKS: Final = (
     ),
     Check(
         id="forward-layer-reflectance",
+        topic="transport",
         source="van-de-hulst-1980",
         says="albedo 0.9, depth 2, g 0.75, no surface: reflectance 0.0974",
         published=0.0974,
@@ -151,6 +181,7 @@ CHECKS: Final = (
     ),
     Check(
         id="forward-layer-transmittance",
+        topic="transport",
         source="van-de-hulst-1980",
         says="albedo 0.9, depth 2, g 0.75, no surface: transmittance 0.6610",
         published=0.6610,
@@ -161,6 +192,7 @@ CHECKS: Final = (
     ),
     Check(
         id="half-space-reflectance",
+        topic="transport",
         source="giovanelli-1955",
         says="half-space, albedo 0.9, isotropic, index 1.5: reflectance 0.2600",
         published=0.2600,
