@@ -46,6 +46,12 @@ def name_in_words(name: str) -> str:
     return code(name) if quantity is None else link(plain(quantity.label), f"../quantities/{name}.md")
 
 
+def bare_name(name: str) -> str:
+    """A quantity by its label, anything else by its own words; without a link."""
+    quantity = _BY_NAME.get(name)
+    return name.replace("_", " ") if quantity is None else quantity.label
+
+
 def value_in_words(value: Any, name: str) -> str:
     """A value with the unit of the quantity or field that it belongs to."""
     if isinstance(value, bool):

@@ -1,17 +1,27 @@
-"""A page for each rule, and the page that lists them: requirement, limits and sources, levels in words, examples."""
+"""A page for each rule, and the page that lists them: requirement, limits and sources, examples run, what it reads."""
 
 from collections.abc import Iterator, Mapping, Sequence
 from itertools import groupby
 from typing import Any, Final
 
-from farside import shipped
-from farside.export.condition_words import in_words, name_in_words, unit_of, value_in_words
+from farside.export.compared import NOTHING, Compared, Outside, by_topic, topic_name
+from farside.export.condition_words import bare_name, in_words, unit_of, value_in_words
 from farside.export.markdown import bullets, code, link, page, plain, table, under
+from farside.export.page_examples import example_rows, marked
+from farside.export.page_inputs import inputs
+from farside.export.references import doi_link, reference, short
 from farside.protocol.protocol import base_protocol
 from farside.protocol.rule import Rule
 
 NO_SOURCE: Final = "common practice, no source"
-_MARKS: Final = {"stop": "■", "revise": "◆", "open": "◇", "watch": "●", "clear": "○", "not-applied": "–"}
+_STRENGTHS: Final = {
+    "standard": "A standard, such as ISO's.",
+    "consensus": "What a body or a review recommends.",
+    "clinical": "What was seen in people's mouths.",
+    "bench": "What was measured in a laboratory.",
+    "common practice": "The maker's word, or what is usually done; no study is cited.",
+    "ours": "Nobody else: it was chosen here, and the reason is given.",
+}
 _TOPICS: Final = {
     "light-dose": "Light dose",
     "spectrum": "Spectrum",
@@ -24,55 +34,44 @@ _TOPICS: Final = {
 }
 
 
-def rule_pages() -> Iterator[tuple[str, str]]:
-    """The path of each page below the site's pages, and its Markdown."""
+def rule_pages(outside: Outside = NOTHING) -> Iterator[tuple[str, str]]:
+    """The path of each page below the site's pages, and its Markdown, with the outside checks as they came out."""
     rules = base_protocol().rules
     yield "rules/index.md", _index(rules)
     for rule in rules:
-        yield f"rules/{rule.id}.md", rule_page(rule)
+        yield f"rules/{rule.id}.md", rule_page(rule, outside)
 
 
-def rule_page(rule: Rule) -> str:
-    """One rule's page."""
+def rule_page(rule: Rule, outside: Outside = NOTHING) -> str:
+    """One rule's page.
+
+    Raises
+    ------
+    ExampleFails
+        When an example does not give the finding that it says.
+    """
     data = rule.data
     limits: Mapping[str, Any] = data.get("limits", {})
     return page(
         rule.title,
         _first_line(rule),
-        f"Rule {code(rule.id)}, judged once for each {rule.about}. Topic: {_TOPICS[rule.topic]}. "
-        f"Strength: {_strength(rule.strength, bool(rule.sources))}.",
+        f"Rule {code(rule.id)} · {_TOPICS[rule.topic]} · judged once for each {rule.about} · "
+        f"{link('strength', 'index.md#what-strengths-mean')}: {_strength(rule.strength, bool(rule.sources))}",
         f"> **Caution.** {plain(rule.caution)}" if rule.caution else None,
+        under("Requirement", _levels(data, limits)),
         under("Why", plain(data["why"])),
-        under("Limits", table(("Limit", "Value", "Strength", "Rests on"), _limit_rows(data)) if limits else None),
-        under("Findings", _levels(data, limits)),
         under("What it says", f"“{_template(data['says'])}”", f"What to do: {_template(data['do'])}"),
-        under("Examples", "Each is also a test of the rule.", table(("Case", "Given", "Finding"), _examples(data))),
+        under("Limits", table(("Limit", "Value", "Strength", "Rests on"), _limit_rows(data)) if limits else None),
+        under(
+            "Examples",
+            "Run through the engine when this page was made. Each is also a test of the rule.",
+            table(("Case", "Given", "Finding", "Says"), example_rows(rule)),
+        ),
+        under("What it reads", inputs(rule)),
+        under("Outside checks", _bearing([check for check in outside.checks if rule.id in check.rules])),
+        under("History", _history(data)),
         under("Sources", _sources(rule)),
     )
-
-
-def cited_rules() -> dict[str, list[str]]:
-    """For each source, the ids of the rules that cite it."""
-    found: dict[str, list[str]] = {}
-    for rule in base_protocol().rules:
-        for cite in dict.fromkeys(rule.sources):
-            found.setdefault(cite, []).append(rule.id)
-    return found
-
-
-def reference(cite: str) -> str:
-    """A source on one line: authors, year, what it is about, where, with its DOI."""
-    source = shipped.sources()[cite]
-    said = ", ".join(plain(source[key]) for key in ("authors", "year") if key in source)
-    where = ". ".join(plain(source[key]) for key in ("journal", "number") if key in source)
-    doi = source.get("doi")
-    parts = [said, plain(source["title"]), where, link(f"doi:{plain(doi)}", f"https://doi.org/{doi}") if doi else ""]
-    return ". ".join(part for part in parts if part) + "."
-
-
-def marked(finding: str) -> str:
-    """A finding's mark and word."""
-    return f"{_MARKS[finding]} {finding.replace('-', ' ')}"
 
 
 def _first_line(rule: Rule) -> str | None:
@@ -96,10 +95,16 @@ def _strength(strength: str, sourced: bool) -> str:
 def _limit_rows(data: Mapping[str, Any]) -> Iterator[Sequence[str]]:
     for name, limit in data["limits"].items():
         sources = limit.get("sources", ())
-        rests = [f"{link(plain(each['cite']), '#' + each['cite'])}: {plain(each['supports'])}" for each in sources]
+        rests = [_cited(each["cite"], each["supports"]) for each in sources]
         rests += [plain(limit["why"])] if "why" in limit else []
         value = value_in_words(limit["value"], _held_against(name, data))
-        yield f"*{plain(name)}*", value, _strength(limit["strength"], bool(sources)), "; ".join(rests)
+        yield f"*{plain(name)}*", value, _strength(limit["strength"], bool(sources)), "<br>".join(rests)
+
+
+def _cited(cite: str, supports: str) -> str:
+    """A citation in a table: who, with the way to it on this page, what it supports, and its DOI."""
+    doi = doi_link(cite)
+    return f"{link(plain(short(cite)), '#' + cite)}: {plain(supports)}" + (f" ({doi})" if doi else "")
 
 
 def _held_against(limit: str, data: Mapping[str, Any]) -> str:
@@ -134,13 +139,28 @@ def _levels(data: Mapping[str, Any], limits: Mapping[str, Any]) -> str:
 def _template(words: str) -> str:
     """A sentence whose placeholders are shown as names."""
     parts = words.replace("{", "\0{").replace("}", "}\0").split("\0")
-    return "".join(f"*{plain(part[1:-1].replace('_', ' '))}*" if part[:1] == "{" else plain(part) for part in parts)
+    return "".join(f"*{plain(bare_name(part[1:-1]))}*" if part[:1] == "{" else plain(part) for part in parts)
 
 
-def _examples(data: Mapping[str, Any]) -> Iterator[Sequence[str]]:
-    for example in data["examples"]:
-        given = [f"{name_in_words(name)}: {value_in_words(value, name)}" for name, value in example["given"].items()]
-        yield plain(example["name"]), "; ".join(given) or "nothing", marked(example["finding"])
+def _bearing(checks: Sequence[Compared]) -> str:
+    """The outside checks that a rule depends on, by topic, misses in full."""
+    if not checks:
+        return "None is tied to this rule."
+    lines = []
+    for topic, group in by_topic(checks).items():
+        counted = [check for check in group if check.counted]
+        missed = [check for check in counted if check.missed]
+        said = (
+            f"{len(counted) - len(missed)} of {len(counted)} within their band" if counted else "none that is counted"
+        )
+        lines.append(f"{link(plain(topic_name(topic)), f'../trust.md#{topic}')}: {said}.")
+        lines += [f"**Missed**: {plain(check.says)}" for check in missed]
+    return bullets(lines)
+
+
+def _history(data: Mapping[str, Any]) -> str | None:
+    changes = data.get("history", ())
+    return bullets(f"Edition {plain(each['edition'])}: {plain(each['says'])}" for each in changes) if changes else None
 
 
 def _sources(rule: Rule) -> str:
@@ -162,6 +182,8 @@ def _index(rules: Sequence[Rule]) -> str:
     named = base_protocol().named()
     intro = (
         f"{len(rules)} rules of the base protocol, edition {plain(named['edition'])}. Each page gives the requirement, "
-        "its limits with their sources, its findings in words and the examples that are its tests."
+        "its limits with their sources, the examples that are its tests, what it reads and the outside checks that "
+        "bear on it."
     )
-    return page("Rules", intro, *parts)
+    strengths = table(("Strength", "What a limit of it rests on"), _STRENGTHS.items())
+    return page("Rules", intro, *parts, under("What strengths mean", strengths))
