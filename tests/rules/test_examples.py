@@ -37,7 +37,7 @@ def test_examples_show_every_finding(rule: Rule) -> None:
 def test_levels_are_nested(rule: Rule) -> None:
     """Where a worse level holds, so do the milder ones after it, over all of the rule's examples."""
     for example in rule.data["examples"]:
-        values, limits = Given(example["given"]), rule.values_of_limits()
+        values, limits = Given(example["given"]), rule.limit_values
         held = [(level.finding, level.when.judged(values, limits)) for level in rule.levels]
         first = next((finding for finding, holds in held if holds), None)
         milder = held[[holds for _, holds in held].index(True) :] if first else []

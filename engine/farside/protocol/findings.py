@@ -68,7 +68,7 @@ class Finding:
             "where": dict(self.where),
             "where_says": self.where_says,
             "values": dict(self.values),
-            "limits": self.rule.values_of_limits(),
+            "limits": dict(self.rule.limit_values),
             "measured": None if self.measured is None else _measured_data(self.measured),
             "missing": list(self.missing),
             "says": self.says,
@@ -88,13 +88,12 @@ def finding_of(rule: Rule, values: SubjectValues) -> Finding | None:
     where = values.subject.where()
     missing = tuple(dict.fromkeys(name for name in outcome.missing for name in _inputs(name, values)))
     says, do = _words(rule, outcome, missing, values)
-    names = dict.fromkeys([*(test.name for test in rule.tests()), *placeholders(rule.says)])
     return Finding(
         rule=rule,
         finding=outcome.finding,
         where=where,
         where_says=_where_words(rule, where, values),
-        values={name: value for name in names if (value := values.get(name)) is not None},
+        values={name: value for name in rule.reads if (value := values.get(name)) is not None},
         missing=missing,
         says=says,
         do=do,
@@ -136,6 +135,8 @@ def _inputs(name: str, values: SubjectValues) -> tuple[str, ...]:
 
 
 def _words(rule: Rule, outcome: Outcome, missing: tuple[str, ...], values: SubjectValues) -> tuple[str, str]:
+    if outcome.finding == "clear":
+        return rule.title, ""
     if outcome.finding == "open" and missing:
         reasons = (_reason(name) for name in missing)
         return said("open-missing", missing="; ".join(reasons)), said("open-missing-do")
@@ -149,7 +150,7 @@ def _reason(name: str) -> str:
 
 
 def _filled(words: str, rule: Rule, values: SubjectValues) -> str:
-    limits = rule.values_of_limits()
+    limits = rule.limit_values
     found: dict[str, str] = {}
     for name in placeholders(words):
         if name == "number":
@@ -193,9 +194,8 @@ def _measured(rule: Rule, outcome: Outcome, values: SubjectValues) -> Measured |
 def _held_against(rule: Rule, values: SubjectValues) -> dict[str, dict[str, tuple[float, Grade, str]]]:
     """By quantity, the limits that it is held against, each with its value, finding and side, worst first."""
     found: dict[str, dict[str, tuple[float, Grade, str]]] = {}
-    values_of_limits = rule.values_of_limits()
     for level in rule.levels:
-        for test in level.when.live(values, values_of_limits):
+        for test in level.when.live(values, rule.limit_values):
             operand = test.operands[0]
             if test.how in _SIDES and operand.sort == "limit" and _is_number(rule.limits[operand.of].value):
                 entry = (float(rule.limits[operand.of].value), level.finding, test.how)

@@ -5,6 +5,7 @@ from dataclasses import dataclass
 from typing import Any, Final, Literal
 
 from farside.protocol.conditions import NEVER, Condition, Test, Values, parsed
+from farside.protocol.wording import placeholders
 from farside.quantities.subject import About
 
 Grade = Literal["stop", "revise", "open", "watch", "clear"]
@@ -39,8 +40,8 @@ class Level:
 class Rule:
     """One requirement.
 
-    A watch of a `standing` rule is about a card and stands whatever the plan. `data` is the file itself, for pages and
-    digest.
+    `reads` names what its conditions and words use. A watch of a `standing` rule is about a card and stands whatever
+    the plan. `data` is the file itself, for pages and digest.
     """
 
     id: str
@@ -49,8 +50,10 @@ class Rule:
     about: About
     applies: Condition
     limits: Mapping[str, Limit]
+    limit_values: Mapping[str, Any]
     open_when: Condition
     levels: tuple[Level, ...]
+    reads: tuple[str, ...]
     says: str
     do: str
     caution: str | None
@@ -58,10 +61,6 @@ class Rule:
     strength: str
     standing: bool
     data: Mapping[str, Any]
-
-    def values_of_limits(self) -> dict[str, Any]:
-        """The limits' values by name."""
-        return {name: limit.value for name, limit in self.limits.items()}
 
     def conditions(self) -> Iterator[Condition]:
         """Every condition of the rule."""
@@ -90,18 +89,24 @@ def rule_of(data: Mapping[str, Any], topic: str) -> Rule:
     cited = [source["cite"] for limit in limits.values() for source in limit.sources]
     cited += [source["cite"] for source in data.get("sources", ())]
     strengths = [limit.strength for limit in limits.values()] or [data.get("strength", "ours")]
+    applies = parsed(data.get("applies", "always"))
+    open_when = parsed(data["open_when"]) if "open_when" in data else NEVER
+    levels = tuple(
+        Level(level["finding"], parsed(level["when"]), level.get("says", data["says"]), level.get("do", data["do"]))
+        for level in data["levels"]
+    )
+    tested = (test.name for when in (applies, open_when, *(level.when for level in levels)) for test in when.tests())
     return Rule(
         id=data["id"],
         title=data["title"],
         topic=topic,
         about=data["about"],
-        applies=parsed(data.get("applies", "always")),
+        applies=applies,
         limits=limits,
-        open_when=parsed(data["open_when"]) if "open_when" in data else NEVER,
-        levels=tuple(
-            Level(level["finding"], parsed(level["when"]), level.get("says", data["says"]), level.get("do", data["do"]))
-            for level in data["levels"]
-        ),
+        limit_values={name: limit.value for name, limit in limits.items()},
+        open_when=open_when,
+        levels=levels,
+        reads=tuple(dict.fromkeys([*tested, *placeholders(data["says"])])),
         says=data["says"],
         do=data["do"],
         caution=data.get("caution"),
@@ -118,7 +123,7 @@ def judged(rule: Rule, values: Values) -> Outcome | None:
     The first level that holds is the finding. Where a missing value could have made a worse one hold, or could decide
     whether the rule applies to what is otherwise a finding, the outcome is `open` and names what is missing.
     """
-    limits = rule.values_of_limits()
+    limits = rule.limit_values
     applies = rule.applies.judged(values, limits)
     if applies is False:
         return None

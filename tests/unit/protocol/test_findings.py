@@ -229,3 +229,10 @@ def test_what_the_model_computes_is_shown_to_two_digits_and_what_was_entered_to_
     assert with_unit(0.77329, computed) == "0.77"
     assert with_unit(0.9991, computed, against=[1.0]) == "0.999"
     assert with_unit(1.25, entered) == "1.25 mm"
+
+
+def test_a_clear_finding_says_what_holds_and_asks_for_nothing():
+    report = report_on(read(example_plan("shallow-clear"), example_cards()), base_protocol())
+    clear = [finding for finding in report.findings if finding.finding == "clear"]
+    assert len(clear) == len(report.findings)
+    assert all((finding.says, finding.do) == (finding.rule.title, "") for finding in clear)
