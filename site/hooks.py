@@ -1,5 +1,6 @@
 """Adds the made pages to the site that MkDocs builds, and lets no page out that has a dead link or rests on nothing."""
 
+import itertools
 import json
 import re
 import sys
@@ -20,6 +21,9 @@ from making.links import dead_links, dead_links_of_the_app
 from making.outside_checks import cited_keys, outside_checks
 from making.places import SITE
 
+WORDY = 40
+"""Letters in a cell from which on its table is one of words."""
+
 
 def on_files(files: Files, config: MkDocsConfig) -> Files:
     """Adds a page for each rule, quantity, file format, the sources and the outside checks."""
@@ -34,6 +38,11 @@ def on_files(files: Files, config: MkDocsConfig) -> Files:
     return files
 
 
+def on_page_content(html: str, **_: object) -> str:
+    """Tells each cell of a table of words the name of its column, by which narrow screens show it."""
+    return re.sub(r"<table>.*?</table>", lambda found: named_cells(found[0]), html, flags=re.DOTALL)
+
+
 def on_post_build(config: MkDocsConfig) -> None:
     """Follows every link of what was built, and every link that the app makes to it."""
     built = Path(config.site_dir)
@@ -46,6 +55,16 @@ def links_of_the_app() -> list[str]:
     views = sorted((SITE / "app" / "views").glob("*.tsx"))
     written = {link for view in views for link in re.findall(r'href="([a-z-]+/)"', view.read_text(encoding="utf-8"))}
     return [*rules, *(f"{page}#sources" for page in rules), *sorted(written)]
+
+
+def named_cells(table: str) -> str:
+    """A table whose cells carry their columns' names, if any cell holds more than a few words."""
+    if max(len(re.sub("<[^>]*>", "", cell)) for cell in re.findall(r"<td>(.*?)</td>", table, re.DOTALL)) < WORDY:
+        return table
+    columns = [re.sub("<[^>]*>", "", head) for head in re.findall(r"<th>(.*?)</th>", table, re.DOTALL)]
+    names = itertools.cycle(columns)
+    named = re.sub("<td>", lambda _: f'<td data-column="{next(names)}">', table)
+    return named.replace("<table>", '<table class="wordy">')
 
 
 def refuse(faults: list[str]) -> None:

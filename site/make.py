@@ -33,7 +33,7 @@ def build(out: Path = BUILT_SITE) -> Path:
     assets = next_one / "assets"
 
     with _step("written pages"):
-        pages = [sys.executable, "-m", "mkdocs", "build", "--strict", "--quiet"]
+        pages = [sys.executable, "-m", "mkdocs", "build", "--strict"]
         subprocess.run([*pages, "-f", SITE / "mkdocs.yml", "-d", next_one], check=True, cwd=TOP)
     with _step("the engine as bytecode"):
         engine = engine_zip.build_engine(assets, node)

@@ -7,6 +7,7 @@ import sys
 from dataclasses import asdict
 from pathlib import Path
 
+import hooks
 import pytest
 from farside import shipped
 from farside.protocol.protocol import base_protocol
@@ -115,6 +116,15 @@ def test_the_checks_of_the_page_are_the_tests_own() -> None:
 def test_what_the_checks_cite_counts_as_used() -> None:
     cited = cited_keys(outside_checks(), shipped.sources())
     assert {"uusitalo-2016", "lane-1998"} <= cited <= set(shipped.sources())
+
+
+def test_cells_of_a_table_of_words_carry_their_columns_names() -> None:
+    row = "<tr><td>far</td><td>What is said of it in <b>more</b> than a few words here</td></tr>"
+    table = f"<table><tr><th>Case</th><th>Says</th></tr>{row}{row}</table>"
+    named = hooks.on_page_content(f"<p>x</p>{table}<table><tr><th>a</th></tr><tr><td>1</td></tr></table>")
+    assert named.count('<td data-column="Case">far</td><td data-column="Says">What') == 2
+    assert named.startswith('<p>x</p><table class="wordy">')
+    assert named.endswith("<table><tr><th>a</th></tr><tr><td>1</td></tr></table>")
 
 
 def change(file: Path, old: str, new: str) -> None:

@@ -3,8 +3,8 @@
 from collections.abc import Iterator, Mapping, Sequence
 from typing import Any, Final
 
-from farside.export.condition_words import name_in_words, value_in_words
-from farside.export.markdown import plain
+from farside.export.condition_words import bare_name, value_in_words
+from farside.export.markdown import code, plain
 from farside.protocol.examples import NOT_APPLIED, Given
 from farside.protocol.rule import Outcome, Rule, judged
 from farside.protocol.wording import filled, placeholders, shown, with_unit
@@ -41,15 +41,20 @@ def marked(finding: str) -> str:
 
 
 def _given(given: Mapping[str, Any]) -> str:
-    parts = [f"{name_in_words(name)}: {value_in_words(value, name)}" for name, value in given.items()]
+    parts = [f"{_named(name)}: {value_in_words(value, name)}" for name, value in given.items()]
     return "; ".join(parts) or "nothing"
+
+
+def _named(name: str) -> str:
+    """A quantity by its label, a field as it is written; what the rule reads is linked elsewhere on its page."""
+    return code(name) if "." in name else plain(bare_name(name))
 
 
 def _says(rule: Rule, outcome: Outcome | None, given: Given) -> str:
     if outcome is None or outcome.finding == "clear":
         return ""
     if outcome.missing:
-        return f"Missing: {', '.join(name_in_words(name) for name in outcome.missing)}"
+        return f"Missing: {', '.join(map(_named, outcome.missing))}"
     words = rule.says if outcome.level is None else outcome.level.says
     return plain(filled(words, dict(_values(rule, words, given))))
 

@@ -112,7 +112,9 @@ def curves(drawn: Drawn, checks: Sequence[Compared]) -> str:
         parts += [_whisker(across.at(check.x), up, check) for check in points]
     named = zip(_DASHES * len(series), series, strict=False)
     names = "; ".join(f"{dash}: {name}" for dash, name in named) if len(series) > 1 else ""
-    caption = f"{drawn.title}. Points: published, with the band; lines: computed." + (f" {names}." if names else "")
+    caption = f"{drawn.title}. Points: published, with the band; lines: computed." + (
+        f" {names[:1].upper()}{names[1:]}." if names else ""
+    )
     said = f"{drawn.title}: {len(checks)} published figures with their bands, and what is computed"
     return _figure(caption, said, parts)
 

@@ -11,9 +11,12 @@ _LONG: Final = 32
 def reference(cite: str) -> str:
     """A source on one line: authors, year, what it is about, where, with its DOI."""
     source = shipped.sources()[cite]
-    said = ", ".join(plain(source[key]) for key in ("authors", "year") if key in source)
+    authors, title, year = (plain(source[key]) if key in source else "" for key in ("authors", "title", "year"))
+    # A line that begins with a year and a full stop would be a numbered list.
+    said = [authors, title] if authors else [title]
+    said[0] += f", {year}" if year else ""
     where = ". ".join(plain(source[key]) for key in ("journal", "number") if key in source)
-    parts = [said, plain(source["title"]), where, doi_link(cite)]
+    parts = [*said, where, doi_link(cite)]
     return ". ".join(part for part in parts if part) + "."
 
 

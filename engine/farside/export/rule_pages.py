@@ -121,7 +121,8 @@ def _held_against(limit: str, data: Mapping[str, Any]) -> str:
             for item in part:
                 yield from search(item, name)
 
-    return next((name for name in search([level["when"] for level in data["levels"]], "") if unit_of(name)), "")
+    conditions = [*(level["when"] for level in data["levels"]), data.get("applies"), data.get("open_when")]
+    return next((name for name in search(conditions, "") if unit_of(name)), "")
 
 
 def _levels(data: Mapping[str, Any], limits: Mapping[str, Any]) -> str:

@@ -53,9 +53,10 @@ def _intro(checks: Sequence[Compared]) -> Iterator[str]:
     for topic, group in by_topic(checks).items():
         counted = [check for check in group if check.counted]
         missed = sum(check.missed for check in counted)
-        numbers = (len(counted), len(counted) - missed, missed, len(group) - len(counted))
-        rows.append((link(plain(topic_name(topic)), f"#{topic}"), *map(_count, numbers)))
-    yield table(("Topic", "Counted", "Within", "Missed", "Not counted"), rows)
+        within = f"{_count(len(counted) - missed)} of {_count(len(counted))}" if counted else "–"
+        apart = _count(len(group) - len(counted))
+        rows.append((link(plain(topic_name(topic)), f"#{topic}"), within, _count(missed), apart))
+    yield table(("Topic", "Within", "Missed", "Not counted"), rows)
     yield (
         "What no check covers is not trusted: a quantity is given only over the ranges on its own page, under "
         f"{link('Quantities', 'quantities/index.md')}. Nothing here was measured by us, and nothing here says that a "

@@ -117,6 +117,11 @@ def test_every_source_is_listed_once() -> None:
     assert headings == list(shipped.sources())
 
 
+def test_no_line_becomes_a_numbered_list() -> None:
+    for name, page in PAGES.items():
+        assert not re.search(r"^\d+[.)] ", page, re.MULTILINE), name
+
+
 def test_text_of_the_data_is_text() -> None:
     assert plain("<b>a|b*c_[d](e)") == r"&lt;b&gt;a\|b\*c\_\[d\](e)"
 
