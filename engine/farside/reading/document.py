@@ -164,6 +164,7 @@ def _first_fault(document: Document, data: object) -> Problem | None:
         if isinstance(value, dict):
             if (problem := _bad_key(document, path, value)) is not None:
                 return problem
+            count += len(value)
             left.extend(((*path, key), part) for key, part in value.items())
         elif isinstance(value, list):
             left.extend(((*path, index), part) for index, part in enumerate(value))

@@ -11,6 +11,7 @@ MESSAGES: Final[Mapping[str, str]] = MappingProxyType(
     {
         # the file as bytes and characters
         "too-large": "the file holds {size} bytes; at most {most} are read",
+        "too-large-yaml": "the file holds {size} characters; at most {most} are read of YAML, more of JSON",
         "not-utf-8": "the file is not text in UTF-8 (byte {byte} cannot be read here); save it as UTF-8",
         "utf-16": "the file is saved as UTF-16; save it as UTF-8",
         "character": "the character {character} cannot stand in a file; remove it",
@@ -36,9 +37,10 @@ MESSAGES: Final[Mapping[str, str]] = MappingProxyType(
         "value-expected": "a value is needed here",
         "after-the-end": "nothing may follow after the end of the file's contents",
         "syntax": "this is not valid YAML; check the indentation, colons and quotes here and on the line before",
+        "directives": "{count} lines begin with %; a file needs none, and at most {most} are read",
         "tag": "a tag ({tag}) cannot stand in a file; remove it",
         "too-deep": "lists and mappings stand too deep in one another here; at most {most} levels are read",
-        "too-many": "the file holds too many values, aliases counted as what they stand for; at most {most} are read",
+        "too-many": "the file holds too many keys and values, aliases counted as what they stand for; at most {most} are read",
         "alias-unknown": "the alias *{name} stands for nothing; no &{name} comes before it",
         "alias-inside-itself": "the alias *{name} stands inside what it stands for",
         "duplicate-key": 'the key "{name}" stands twice in {where}, first in line {first}',

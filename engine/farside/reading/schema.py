@@ -69,9 +69,26 @@ def _kind() -> tuple[Any, Any]:
         if isinstance(instance, str) and not re.search(_to_the_end(wanted), instance):
             yield ValidationError("of another form")
 
+    def unless_too_many(keyword: str, most: str) -> Any:
+        """A keyword that does not look into what holds too many; that it does is problem enough."""
+        usual: Any = Draft202012Validator.VALIDATORS[keyword]
+
+        def look(validator: Any, wanted: Any, instance: Any, schema: Schema) -> Iterator[ValidationError]:
+            if not isinstance(instance, (list, dict)) or len(instance) <= schema.get(most, len(instance)):
+                yield from usual(validator, wanted, instance, schema)
+
+        return look
+
     formats = FormatChecker(formats=())
     formats.checks("date", raises=ValueError)(_is_day)
-    return extend(Draft202012Validator, {"pattern": pattern}), formats  # type: ignore[no-untyped-call]
+    keywords = {
+        "pattern": pattern,
+        "items": unless_too_many("items", "maxItems"),
+        "patternProperties": unless_too_many("patternProperties", "maxProperties"),
+        "additionalProperties": unless_too_many("additionalProperties", "maxProperties"),
+        "propertyNames": unless_too_many("propertyNames", "maxProperties"),
+    }
+    return extend(Draft202012Validator, keywords), formats  # type: ignore[no-untyped-call]
 
 
 def _to_the_end(pattern: str) -> str:

@@ -168,7 +168,8 @@ def _strangeness(errors: list[Any]) -> tuple[int, int, int]:
             continue
         if error.validator == "additionalProperties":
             known = error.schema.get("properties", {})
-            strange += sum(1 if nearest(name, known) else 2 for name in error.instance if name not in known)
+            names = islice((name for name in error.instance if name not in known), MOST_KEYS)
+            strange += sum(1 if nearest(name, known) else 2 for name in names)
         missing += error.validator == "required"
     return strange, missing, len(errors)
 

@@ -10,7 +10,7 @@ from farside.reading.scalars import LONGEST_NUMBER, NotFinite, Scalar, TooLong, 
 At = tuple[int, int]
 
 DEEPEST: Final = 40
-MOST_VALUES: Final = 50_000
+MOST_VALUES: Final = 10_000
 
 
 class _Anchor:

@@ -13,6 +13,9 @@ import yaml
 from farside.reading.faults import Fault
 from farside.reading.tree import At, Tree
 
+LARGEST: Final = 150_000
+"""Characters of YAML that are read: more than a plan has, and a second's work for the pure parser."""
+
 _PURE: Final[Any] = yaml.SafeLoader
 _QUICK: Final[Any] = getattr(yaml, "CSafeLoader", None)
 
@@ -31,6 +34,8 @@ _BY_PROBLEM: Final = (
 _COMMA: Final = re.compile(r"expected ',' or '([\]}])', but got (.*)", re.DOTALL)
 _NO_TOKEN: Final = re.compile(r"found character '(.*)' that cannot start any token", re.DOTALL)
 _TAKEN_DIFFERENTLY: Final = re.compile("[\\t?!]|[|>][-+0-9]*#")
+_DIRECTIVE: Final = re.compile("^%", re.MULTILINE)
+_MOST_DIRECTIVES: Final = 10
 _OPENING: Final = {"]": "[", "}": "{"}
 
 
@@ -42,6 +47,10 @@ def grow_from_yaml(text: str) -> Tree:
     Fault
         For all that is not YAML or that a tree refuses.
     """
+    if len(text) > LARGEST:
+        raise Fault("too-large-yaml", 0, 0, size=len(text), most=LARGEST)
+    if len(directives := _DIRECTIVE.findall(text)) > _MOST_DIRECTIVES:
+        raise Fault("directives", 0, 0, count=len(directives), most=_MOST_DIRECTIVES)
     if _QUICK is not None and not _TAKEN_DIFFERENTLY.search(text):
         try:
             return _grown(_QUICK(text))
