@@ -18,6 +18,7 @@ WRITTEN = (
     "quantities/",
     "formats/plan/",
     "sources/",
+    "trust/",
 )
 
 

@@ -129,8 +129,10 @@ def _row(checks: Sequence[Compared]) -> Sequence[str]:
         many = f"**{_capital(worst.row_says)}: {_count(len(checks))} points.**"
         what = f"{many} The worst: {plain(worst.says)}. {_note(worst)}"
         outcome = f"**{missed} missed**" if missed else "all within"
-    if not worst.counted:
-        outcome += ", sets a parameter" if worst.kind == "set-by" else ", order of size only"
+    if worst.kind == "set-by":
+        outcome = "sets a parameter"
+    elif not worst.counted:
+        outcome += ", order of size only"
     return (
         f"{what.strip()}<br>*{_source(worst)}*",
         f"{_published(worst)}<br>{_band(worst)}",
@@ -161,13 +163,15 @@ def _published(check: Compared) -> str:
 
 
 def _with_unit(check: Compared, value: float) -> str:
-    return f"{figure(value)} {plain(check.unit)}".strip()
+    return f"{figure(value)}\u00a0{plain(check.unit)}".strip()
 
 
 def _band(check: Compared) -> str:
     if not check.band:
         return "no more"
-    return f"± {figure(100 * check.band, 2)} %" if check.relative else f"± {_with_unit(check, check.band)}"
+    return (
+        f"±\u00a0{figure(100 * check.band, 2)}\u00a0%" if check.relative else f"±\u00a0{_with_unit(check, check.band)}"
+    )
 
 
 def _difference(check: Compared) -> str:
@@ -183,7 +187,7 @@ def _difference(check: Compared) -> str:
 def _signed(value: float, unit: str) -> str:
     text = figure(value, 2)
     sign = "" if text[0] == "−" or value == 0.0 else "+"
-    return f"{sign}{text} {plain(unit)}".strip()
+    return f"{sign}{text}\u00a0{plain(unit)}".strip()
 
 
 def _capital(words: str) -> str:
@@ -191,4 +195,4 @@ def _capital(words: str) -> str:
 
 
 def _count(number: int) -> str:
-    return f"{number:,}".replace(",", " ")
+    return f"{number:,}".replace(",", "\u00a0")
