@@ -8,15 +8,31 @@ from collections import defaultdict
 from collections.abc import Iterator
 from typing import Final
 
-from reference import beam_checks, dose_checks, paste_checks, room_and_eye_checks, transport_checks
+from reference import (
+    ambient_checks,
+    beam_checks,
+    dose_checks,
+    edge_checks,
+    eye_checks,
+    paste_checks,
+    room_and_eye_checks,
+    spread_checks,
+    tooth_checks,
+    transport_checks,
+)
 from reference.checks import Check, Figure, Group, Row
 
 _MODULES: Final = (
     transport_checks,
     beam_checks,
+    spread_checks,
     dose_checks,
+    edge_checks,
     paste_checks,
+    tooth_checks,
     room_and_eye_checks,
+    ambient_checks,
+    eye_checks,
 )
 
 CHECKS: Final[tuple[Check, ...]] = tuple(check for module in _MODULES for check in module.CHECKS)

@@ -1,4 +1,4 @@
-"""Room lights from the CIE's illuminants by colour-science, working times, blue-light weights and seconds a day."""
+"""Room lights from the CIE's illuminants by colour-science, blue-light weights and seconds a day by hand."""
 
 import warnings
 from collections.abc import Iterator
@@ -7,7 +7,6 @@ from typing import TYPE_CHECKING, Any, Final
 
 from farside.physics.eyes.hazard import blue_light_weight, day_limit_s, reflected_radiance_w_m2_sr
 from farside.physics.light.initiators import molar_absorption
-from farside.physics.room.window import working_window_s
 from reference import tables
 from reference.checks import Check, Figure, Group
 
@@ -127,17 +126,6 @@ CHECKS: Final = (
     *_room_lights(),
     *_eye_weights(),
     Check(
-        id="working-time-in-clinic",
-        topic="room",
-        source="lane-1998",
-        says="23 composites: 162 s at 8 000 lx, 54 s in a clinic at 24 000 lx",
-        published=54.0,
-        unit="s",
-        band=0.02,
-        how_sure="seen",
-        computed=lambda: working_window_s(8000.0, 162.0, 0.0942, ((24000.0, 0.0942),)),
-    ),
-    Check(
         id="tooth-radiance",
         topic="arithmetic",
         source="worked by hand",
@@ -155,20 +143,6 @@ CHECKS: Final = (
         published=981.7,
         unit="s",
         band=1e-4,
-        computed=partial(_day_limit_s, 1000.0, 0.4, 460.0),
-    ),
-    Check(
-        id="tooth-day-limit-measured",
-        topic="eyes",
-        source="price-2016",
-        says="light thrown back from a tooth: about 11 minutes a day; the lamp's irradiance is not known here, "
-        "1 000 mW/cm² is taken",
-        published=660.0,
-        unit="s",
-        band=0.5,
-        kind="plausibility",
-        note="1 000 mW/cm² and a reflectance of 0.4 are taken.",
-        how_sure="seen",
         computed=partial(_day_limit_s, 1000.0, 0.4, 460.0),
     ),
 )
