@@ -80,7 +80,7 @@ def test_opening_a_good_file_gives_its_data():
         ("kind: plan\ntitle: [a\n", 2, ""),
         ("kind: plan\ntitle: A\nincrements:\n  - {thicknes_mm: 2.0}\n", 4, 'did you mean "thickness_mm"'),
         ("kind: plam\n", 1, '"plam" is no kind of file that is read here'),
-        ("title: A\n", 1, "a file without a kind is no kind of file"),
+        ("title: A\n", 1, "the file does not say its kind"),
         ("kind: lamp\nkind: plan\n", 2, "kind"),
         ('{"kind": "plan", "gap_mm": NaN}', 1, ""),
         ("", 1, ""),

@@ -4,6 +4,8 @@ from collections.abc import Mapping
 from typing import Final
 
 MESSAGES: Final[Mapping[str, str]] = {
+    "kind-missing": "the file does not say its kind; begin it with one, such as kind: plan; the kinds are {kinds}",
+    "kind-unknown-near": '"{found}" is no kind of file that is read here; did you mean "{near}"?',
     "kind-unknown": "{found} is no kind of file that is read here; the kinds are {kinds}",
     "kind-not-opened": "a {found} cannot be opened here; what can is {kinds}",
     "one-at-a-time": "a second {kind} among the files; open one {kind} at a time, with as many cards as it needs",

@@ -13,6 +13,7 @@ from farside.reading.defaults import with_defaults
 from farside.reading.document import Document, read_document
 from farside.reading.problems import Refused
 from farside.reading.schema import Validator, check_by, nearest, validator_of
+from farside.reading.tree import type_word
 
 KINDS: Final = ("plan", "lamp", "composite", "adhesive", "liner", "clinic", "rule", "protocol")
 
@@ -39,8 +40,12 @@ def kind_of(document: Document) -> str:
         When it says none, or one that is not read here.
     """
     kind = document.data.get("kind")
+    if kind is None:
+        refuse(document, "kind-missing", ("kind",), kinds=", ".join(KINDS))
     if kind not in KINDS:
-        found = "a file without a kind" if kind is None else f'"{kind}"'
+        if isinstance(kind, str) and (near := nearest(kind, KINDS)) is not None:
+            refuse(document, "kind-unknown-near", ("kind",), found=kind, near=near)
+        found = f'"{kind}"' if isinstance(kind, str) else type_word(kind)
         refuse(document, "kind-unknown", ("kind",), found=found, kinds=", ".join(KINDS))
     return str(kind)
 

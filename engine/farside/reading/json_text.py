@@ -17,6 +17,7 @@ _TOKEN: Final = re.compile(
 _SPACE: Final = re.compile(r"[ \t\r\n]*")
 _LINE_END: Final = re.compile("\r\n|\r|\n")
 _OPEN_TEXT: Final = re.compile(r'"(?:[^"\\\x00-\x1f]|\\.)*\\?')
+_WHOLE_AND_COMMA: Final = re.compile(r"([0-9]+),\Z")
 _CLOSES: Final = {"{": "}", "[": "]"}
 
 
@@ -81,6 +82,8 @@ class _Reader:
                 self.tree.refuse_number(word, at)
             self.tree.plain(word, at)
             return self.after_value()
+        elif wanted == "key" and (before := _WHOLE_AND_COMMA.search(self.text, 0, token.start())):
+            raise NotJson(Fault("decimal-comma", *at, written=f"{before[1]}.{word}"))
         raise NotJson(self.why(wanted, at))
 
     def mark(self, mark: str, wanted: str, at: At) -> str:

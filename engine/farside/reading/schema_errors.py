@@ -101,6 +101,8 @@ def _wrong_type(document: Document, value: object, wanted: str | list[str], path
         return document.problem(MESSAGES, key, path, wanted=word, value=value, number=number.written)
     if isinstance(value, str) and kinds == {"boolean"} and (written := ANSWERS.get(value.lower())):
         return document.problem(MESSAGES, "type-answer", path, wanted=word, written=written)
+    if isinstance(value, str) and kinds & {"number", "integer"} and "object" not in kinds:
+        return document.problem(MESSAGES, "type-word", path, wanted=word, value=value)
     if kinds == {"string"} and isinstance(value, (bool, int, float)):
         return document.problem(MESSAGES, "type-text", path, found=type_word(value))
     found = shown_value(value) if kinds == {"integer"} and isinstance(value, float) else type_word(value)
@@ -125,8 +127,11 @@ def _unknown_keys(document: Document, error: Any, path: Path) -> Iterator[Proble
     for name in islice(strange, MOST_KEYS):
         values: dict[str, Any] = {"name": name, "where": path_text(path)}
         near = nearest(name, (key for key in known if key not in error.instance))
-        if near is not None:
-            key, values = "unknown-key-near", {**values, "near": near}
+        if name == "<<":
+            key = "merge-key"
+        elif near is not None:
+            # a letter of another script may look the same, so it is shown as its code
+            key, values = "unknown-key-near", {**values, "name": _in_ascii(name), "near": near}
         elif patterns and "x-form" in schema:
             key, values = "key-form", {**values, "form": schema["x-form"]}
         elif 0 < len(known) <= 8:
@@ -134,6 +139,10 @@ def _unknown_keys(document: Document, error: Any, path: Path) -> Iterator[Proble
         else:
             key = "unknown-key"
         yield document.problem(MESSAGES, key, (*path, name), at_key=True, **values)
+
+
+def _in_ascii(text: str) -> str:
+    return text.encode("ascii", "backslashreplace").decode("ascii")
 
 
 def _branches(document: Document, error: Any, path: Path) -> Iterator[Problem]:

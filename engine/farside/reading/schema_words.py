@@ -18,6 +18,8 @@ _TYPES: Final = {
 ANSWERS: Final = {"yes": "true", "on": "true", "y": "true", "no": "false", "off": "false", "n": "false"}
 _NUMBER: Final = re.compile(r"([-+]?)([0-9][0-9 \u00a0\u202f]*)(?:([.,])([0-9]+))?\s*(.*)\Z", re.DOTALL)
 _UNIT: Final = re.compile(r"[a-zA-Zµ°%/²³ ^0-9]{1,12}\Z")
+# Letters taken for the digits 0 and 1, which are no unit after a number.
+_LIKE_DIGITS: Final = ("O", "o", "I")
 
 
 class Meant(NamedTuple):
@@ -64,10 +66,10 @@ def looks_like_number(text: str) -> Meant | None:
         return None
     sign, whole, mark, part, rest = found.groups()
     written = sign.removeprefix("+") + re.sub(r"\s", "", whole) + (f".{part}" if part else "")
-    if rest and not _UNIT.match(rest):
+    if (rest and not _UNIT.match(rest)) or text.strip().endswith(_LIKE_DIGITS):
         return None
     if mark == ",":
         return Meant(written, "comma")
     if rest:
         return Meant(written, "unit")
-    return Meant(written, "quotes")
+    return Meant(written, "spaces" if re.search(r"\s", whole.strip()) else "quotes")
