@@ -18,6 +18,7 @@ NOTE: Final = (
     "Each paste has one smoothing length for all depths, too long near the surface and too short deep down: from 4 mm "
     "too much light is counted beside the axis, the unsafe side."
 )
+NOTE_FACTOR: Final = "The smoothing length's factor was chosen by an earlier Monte Carlo, not by these figures."
 NOTE_MIDDLE: Final = (
     "The middle's dose is that of an endless beam; what the rim takes from it is not counted. The need is worked out "
     "in the same way, so it is unsafe only where a plan is deeper, or its beam narrower, than its maker's."
@@ -113,9 +114,9 @@ def _checks() -> Iterator[Check]:
             published=row["share"],
             unit="",
             band=BAND,
-            kind="counted" if misses_by is None else "miss",
+            kind="miss" if misses_by is not None else "plausibility" if middle else "counted",
             misses_by=misses_by,
-            note="" if misses_by is None else NOTE_MIDDLE if middle else NOTE,
+            note=NOTE_MIDDLE if middle else NOTE if misses_by is not None else NOTE_FACTOR,
             rules=("far-side-dose", "first-increment-deep") if middle else RULES,
             group=group if misses_by is None else f"{group}-missed",
             computed=(lambda: 1.0) if middle else partial(beside_axis, row),

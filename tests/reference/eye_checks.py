@@ -60,7 +60,8 @@ CHECKS: Final = (
         band=0.5,
         kind="plausibility",
         note="The lamp's irradiance is not known here: 1 000 mW/cm² at 460 nm and the usual reflectance of 0.4 are "
-        "taken, and the lamp was held at 45°. Half as much again of either would give the 11 min.",
+        "taken, and the lamp was held at 45°. Half as much again of either would give the 11 min; if both "
+        "were as taken, too long a time is allowed: the unsafe side.",
         rules=RULES,
         how_sure="seen",
         computed=partial(off_tooth_min, 1000.0, 0.4),
