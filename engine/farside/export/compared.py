@@ -116,6 +116,14 @@ def by_topic(checks: Iterable[Compared]) -> dict[str, list[Compared]]:
     return found
 
 
+def by_row(checks: Iterable[Compared]) -> dict[str, list[Compared]]:
+    """Checks by the row that they are shown in, in the order in which rows first come."""
+    found: dict[str, list[Compared]] = {}
+    for check in checks:
+        found.setdefault(check.row, []).append(check)
+    return found
+
+
 def topic_name(topic: str) -> str:
     """A topic as its heading has it."""
     return TOPICS.get(topic, topic.replace("-", " ").capitalize())

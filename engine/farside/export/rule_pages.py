@@ -4,7 +4,7 @@ from collections.abc import Iterator, Mapping, Sequence
 from itertools import groupby
 from typing import Any, Final
 
-from farside.export.compared import NOTHING, Compared, Outside, by_topic, topic_name
+from farside.export.compared import NOTHING, Compared, Outside, by_row, by_topic, topic_name
 from farside.export.condition_words import bare_name, in_words, unit_of, value_in_words
 from farside.export.markdown import bullets, code, link, page, plain, table, under
 from farside.export.page_examples import example_rows, marked
@@ -155,8 +155,14 @@ def _bearing(checks: Sequence[Compared]) -> str:
             f"{len(counted) - len(missed)} of {len(counted)} within their band" if counted else "none that is counted"
         )
         lines.append(f"{link(plain(topic_name(topic)), f'../trust.md#{topic}')}: {said}.")
-        lines += [f"**Missed**: {plain(check.says)}" for check in missed]
+        lines += [f"**Missed**: {_missed(checks)}" for checks in by_row(missed).values()]
     return bullets(lines)
+
+
+def _missed(checks: Sequence[Compared]) -> str:
+    """One check, or how many of a row, with what is known of why."""
+    head = checks[0].says if len(checks) == 1 else f"{len(checks)} points of: {checks[0].row_says}"
+    return f"{plain(head)}. {plain(checks[0].note)}".strip()
 
 
 def _history(data: Mapping[str, Any]) -> str | None:

@@ -4,13 +4,14 @@ from collections.abc import Iterator, Sequence
 from typing import Final
 
 from farside import shipped
-from farside.export.compared import Compared, Outside, by_topic, topic_name
-from farside.export.markdown import code, link, page, plain, table, under
+from farside.export.compared import Compared, Outside, by_row, by_topic, topic_name
+from farside.export.markdown import link, page, plain, table, under
 from farside.export.page_plots import curves, figure, scatter, shares
 from farside.export.references import short
 from farside.protocol.protocol import base_protocol
 
 TITLE: Final = "How far to trust it"
+_HUNDRED: Final = 100.0
 _MANY: Final = 8
 _NOTHING: Final = 1e-3
 _HEAD: Final = ("What", "Published", "Computed", "Difference", "Outcome")
@@ -41,9 +42,10 @@ def tally(checks: Sequence[Compared]) -> str:
 
 def _intro(checks: Sequence[Compared]) -> Iterator[str]:
     yield (
-        "A check holds a figure that was had outside Farside, in print or from a program of somebody else's, against "
-        "what the model computes. Each has a band: how far off is still right. All of it was computed when this page "
-        "was made, from the same list that the tests run on."
+        "A check holds a figure that was had outside the model against what the model computes: a figure in print, "
+        "from somebody else's program, or from one of ours that was written apart from the model and shares nothing "
+        "with it. Each has a band: how far off is still right. All of it was computed when this page was made, from "
+        "the same list that the tests run on."
     )
     yield (
         f"**{tally(checks)}** Not counted: figures that set a parameter of the model, which prove nothing, and those "
@@ -68,12 +70,17 @@ def _misses(missed: Sequence[Compared]) -> Iterator[str]:
     if not missed:
         yield "No check lies outside its band."
         return
-    yield "Shown as they are; no band was widened to hide one."
-    for check in missed:
-        rules = ", ".join(_rule(rule) for rule in check.rules) or "none"
+    yield "Shown as they are; no band was widened to hide one. In the plots a miss is a cross."
+    for checks in by_row(missed).values():
+        worst = max(checks, key=lambda check: abs(check.share_of_band))
+        rules = ", ".join(_rule(rule) for rule in worst.rules) or "none"
+        band = f", band {_band(worst)}" if worst.band else ""
+        head = f"**{_capital(worst.says)}**"
+        if len(checks) > 1:
+            head = f"**{_capital(worst.row_says)}: {_count(len(checks))} points.** The worst: {plain(worst.says)}"
         yield (
-            f"- **{_capital(check.says)}** ({_source(check)}). Published {_published(check)}, band {_band(check)}; "
-            f"computed {_with_unit(check, check.computed)}, off by {_difference(check)}. {_note(check)}"
+            f"- {head} ({_source(worst)}). Published {_published(worst)}{band}; "
+            f"computed {_with_unit(worst, worst.computed)}, off by {_difference(worst)}. {_note(worst)}"
             f"Rules that depend on it: {rules}."
         )
 
@@ -83,24 +90,17 @@ def _setting(checks: Sequence[Compared]) -> Iterator[str]:
         yield "None."
         return
     yield "The model was given these; that it gives them back is no proof of anything."
-    for row in _by_row(checks).values():
-        sets = ", ".join(map(code, row[0].sets))
+    for row in by_row(checks).values():
+        sets = ", ".join(f"*{plain(name)}*" for name in row[0].sets)
         yield f"- {_capital(row[0].row_says)} ({_source(row[0])}) sets {sets}."
 
 
 def _topic(topic: str, group: Sequence[Compared], outside: Outside) -> str:
     rules = list(dict.fromkeys(rule for check in group for rule in check.rules))
     depend = f"Rules that depend on it: {', '.join(_rule(rule) for rule in rules)}." if rules else ""
-    rows = [_row(checks) for checks in _by_row(group).values()]
+    rows = [_row(checks) for checks in by_row(group).values()]
     parts = [f"## {topic_name(topic)} {{: #{topic} }}", depend, _plots(group, outside), table(_HEAD, rows)]
     return "\n\n".join(part for part in parts if part)
-
-
-def _by_row(group: Sequence[Compared]) -> dict[str, list[Compared]]:
-    found: dict[str, list[Compared]] = {}
-    for check in group:
-        found.setdefault(check.row, []).append(check)
-    return found
 
 
 def _plots(group: Sequence[Compared], outside: Outside) -> str:
@@ -111,7 +111,7 @@ def _plots(group: Sequence[Compared], outside: Outside) -> str:
         if points:
             over_published = all(check.x == check.published for check in points)
             made.append(scatter(drawn.title, points) if over_published else curves(drawn, points))
-    rows = [checks for checks in _by_row(group).values() if len(checks) >= _MANY]
+    rows = [checks for checks in by_row(group).values() if len(checks) >= _MANY]
     made += [scatter(checks[0].row_says, checks) for checks in rows if not any(check.figure for check in checks)]
     counted = [check for check in group if check.counted]
     if len(counted) >= _MANY:
@@ -185,7 +185,7 @@ def _difference(check: Compared) -> str:
 
 
 def _signed(value: float, unit: str) -> str:
-    text = figure(value, 2)
+    text = figure(value, 2 if abs(value) < _HUNDRED else 3)
     sign = "" if text[0] == "−" or value == 0.0 else "+"
     return f"{sign}{text}\u00a0{plain(unit)}".strip()
 

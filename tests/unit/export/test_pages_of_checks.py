@@ -61,6 +61,15 @@ def test_a_miss_is_shown_as_one_with_the_rules_that_depend_on_it() -> None:
     assert "| **missed** |" in page_of(HIT, MISS)
 
 
+def test_many_misses_of_a_row_are_told_at_once_by_the_worst() -> None:
+    worse = replace(MISS, id="worse", says="light behind 2 mm", computed=99.0)
+    misses = page_of(MISS, worse).partition("## Misses")[2].partition("## Figures")[0]
+    assert misses.count("\n- ") == 1
+    assert "Light behind a tooth: 2 points.** The worst: light behind 2 mm" in misses
+    page = rule_page(base_protocol().rule("close-to-pulp"), Outside((MISS, worse)))
+    assert "**Missed**: 2 points of: light behind a tooth. no surface" in page
+
+
 def test_a_check_that_comes_to_lie_outside_its_band_is_a_miss_whatever_was_expected() -> None:
     assert "**missed**" in page_of(replace(HIT, computed=43.0))
     assert "**missed**" not in page_of(replace(MISS, computed=41.0))
@@ -68,7 +77,7 @@ def test_a_check_that_comes_to_lie_outside_its_band_is_a_miss_whatever_was_expec
 
 def test_what_sets_a_parameter_says_which_and_is_no_miss() -> None:
     page = page_of(replace(SETS, computed=99.0))
-    assert "sets `tooth.attenuation_per_mm`" in page
+    assert r"sets *tooth.attenuation\_per\_mm*" in page
     assert "**missed**" not in page
 
 
@@ -122,5 +131,5 @@ def test_rules_and_sources_name_the_checks_that_bear_on_them() -> None:
     outside = Outside((HIT, MISS, SETS))
     page = rule_page(base_protocol().rule("close-to-pulp"), outside)
     assert "[Tooth](../trust.md#tooth): 1 of 2 within their band." in page
-    assert "**Missed**: light behind 1 mm" in page
+    assert "**Missed**: light behind 1 mm. no surface" in page
     assert "[Tooth](trust.md#tooth): 2 outside checks; sets tooth.attenuation" in source_page(outside).replace("\\", "")
