@@ -127,13 +127,19 @@ def _checks() -> Iterator[Check]:
 GROUPS: Final = (
     Group("edge-rim", "Light 1 to 4 mm deep at a wall under the rim of an 8 mm tip that is 2 to 8 mm off"),
     Group("edge-inside", "Light 1 to 4 mm deep at a wall 2 mm off the axis of an 8 mm tip that is 2 to 8 mm off"),
-    Group("edge-inside-missed", "The same where it misses: 4 mm deep, the tip 2 to 4 mm off"),
+    Group("edge-inside-missed", "Light at a wall 2 mm off the axis, where it misses: 4 mm deep, the tip 2 to 4 mm off"),
     Group("edge-touching", "Light 1 to 4 mm deep off the axis of a tip of 6 or 8 mm that touches the paste"),
-    Group("edge-touching-missed", "The same where it misses: mostly 4 mm deep, and 1 mm deep in a clear paste"),
+    Group(
+        "edge-touching-missed",
+        "Light off the axis of a tip that touches, where it misses: mostly 4 mm deep, and 1 mm in a clear paste",
+    ),
     Group(
         "edge-middle", "Light 1 to 4 mm deep on the axis of an 8 mm tip 2 to 8 mm off, taken as that of an endless beam"
     ),
-    Group("edge-middle-missed", "The same where it misses: the deeper and the clearer, the more"),
+    Group(
+        "edge-middle-missed",
+        "Light on the axis taken as an endless beam's, where it misses: the deeper and the clearer, the more",
+    ),
 )
 FIGURES: Final = (Figure("edge", "Light off the axis, deep in a paste", "Monte Carlo", "Farside"),)
 CHECKS: Final = tuple(_checks())
