@@ -9,6 +9,7 @@ import os
 import subprocess
 import sys
 import time
+from collections import Counter
 from collections.abc import Callable, Sequence
 from dataclasses import dataclass, field
 from pathlib import Path
@@ -109,6 +110,24 @@ def counted(results: Path) -> tuple[int, int, int]:
     return total - failed - skipped, failed, skipped
 
 
+def evidence(results: Path) -> list[str]:
+    """What a JUnit file says of the outside checks, by their kind, and of the rules' examples."""
+    checks: Counter[str] = Counter()
+    examples: Counter[bool] = Counter()
+    for case in ET.parse(results).getroot().iter("testcase"):
+        passed = not any(case.find(sign) is not None for sign in ("failure", "error", "skipped"))
+        if case.get("name", "").startswith("test_example_gives_its_finding["):
+            examples[passed] += 1
+        for entry in case.iter("property"):
+            if entry.get("name") == "outside-check":
+                checks[f"{entry.get('value')}{'' if passed else ' FAILED'}"] += 1
+    kinds = ", ".join(f"{count} {kind}" for kind, count in sorted(checks.items()))
+    return [
+        f"Outside checks: {checks.total()} ({kinds})",
+        f"Rules' examples: {examples.total()}, {examples[True]} as stated",
+    ]
+
+
 def run(step: Step, tally: Tally) -> None:
     say(f"\n== {step.name}")
     if step.results:
@@ -148,6 +167,9 @@ def main() -> int:
         run(step, tally)
 
     say(f"\nAll of it took {(time.monotonic() - start) / 60:.1f} minutes.")
+    if (fast := RESULTS / "tests.xml").exists():
+        for line in evidence(fast):
+            say(line)
     if tally.failures:
         say(f"Failed: {', '.join(tally.failures)}")
     say(f"{tally.passed} passed, {tally.failed} failed, {tally.skipped} skipped")

@@ -1,5 +1,6 @@
 """Every outside check lies within its band or misses by what is stated, and says where it comes from."""
 
+from collections.abc import Callable
 from operator import attrgetter
 
 import pytest
@@ -15,13 +16,15 @@ SAME_IN_A_GROUP = attrgetter("topic", "source", "unit", "kind", "sets", "rules",
 
 
 @pytest.mark.parametrize("check", HITS, ids=attrgetter("id"))
-def test_within_band(check: Check) -> None:
+def test_within_band(check: Check, record_property: Callable[[str, str], None]) -> None:
+    record_property("outside-check", check.kind)
     result = check.result()
     assert result.within, f"{result.difference:.6g} {check.unit} off, {result.allowed:.6g} allowed"
 
 
 @pytest.mark.parametrize("check", MISSES, ids=attrgetter("id"))
-def test_still_misses_by_what_is_stated(check: Check) -> None:
+def test_still_misses_by_what_is_stated(check: Check, record_property: Callable[[str, str], None]) -> None:
+    record_property("outside-check", check.kind)
     result = check.result()
     assert not result.within, "it hits now: say so"
     assert result.difference == pytest.approx(check.misses_by, rel=0.03)
