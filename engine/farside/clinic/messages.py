@@ -22,7 +22,7 @@ MESSAGES: Final[Mapping[str, str]] = {
     "initiators-absorb-more": (
         "the initiators alone absorb {initiators} /mm at {at_nm} nm, more than the measured total of {total} /mm"
     ),
-    "transmittance-impossible": "no paste lets {share} of the light through {at_mm} mm: {why}",
+    "transmittance-impossible": "no paste lets {share} of the light through {at_mm} mm with this scattering",
     "initiator-unknown": 'no initiator is called "{what}"; those known are {known}',
     "thicker-than-cavity": (
         "{what} is {thickness}; the cavity is {depth} mm deep, so it must be above 0 and at most {depth}"

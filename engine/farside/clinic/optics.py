@@ -117,9 +117,9 @@ def _inverted(document: Document, optics: Mapping[str, Any], scattering: float, 
     share, at_mm = float(optics["transmittance_share"]), float(optics["at_mm"])
     try:
         return _absorption(share, at_mm, scattering, index)
-    except ValueError as impossible:
+    except ValueError:
         path = ("optics", "transmittance_share")
-        refuse(document, "transmittance-impossible", path, share=f"{share:g}", at_mm=f"{at_mm:g}", why=impossible)
+        refuse(document, "transmittance-impossible", path, share=f"{share:g}", at_mm=f"{at_mm:g}")
 
 
 @lru_cache(maxsize=64)

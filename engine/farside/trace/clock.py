@@ -1,7 +1,9 @@
 """The chair clock: what happens when, from the adhesive's exposure to the last one."""
 
-from collections.abc import Iterator
+from bisect import bisect_right
+from collections.abc import Iterator, Sequence
 from dataclasses import dataclass
+from itertools import accumulate
 from typing import Final, Literal
 
 from farside.clinic.plan import Exposure, LayerUse, Plan
@@ -40,13 +42,13 @@ def chair_clock(plan: Plan) -> tuple[Spell, ...]:
     return tuple(spells)
 
 
-def largest_in_window(spells: list[tuple[float, float, float]], window_s: float = WINDOW_S) -> float:
+def largest_in_window(spells: Sequence[tuple[float, float, float]], window_s: float = WINDOW_S) -> float:
     """The largest sum that some spells give within a window of time.
 
     Parameters
     ----------
-    spells : list of (float, float, float)
-        Start [s], length [s] and rate of each.
+    spells : sequence of (float, float, float)
+        Start [s], length [s] and rate of each, one after the other.
     window_s : float
         Length of the window. [s]
 
@@ -55,12 +57,21 @@ def largest_in_window(spells: list[tuple[float, float, float]], window_s: float 
     float
         Rate times seconds, in the rate's unit times seconds.
     """
-    starts = [start for start, _, _ in spells] + [start + length - window_s for start, length, _ in spells]
-    return max((_sum_within(spells, start, start + window_s) for start in starts), default=0.0)
+    starts = [start for start, _, _ in spells]
+    before = [0.0, *accumulate(length * rate for _, length, rate in spells)]
 
+    def until(moment_s: float) -> float:
+        """The sum from the beginning to a moment."""
+        index = bisect_right(starts, moment_s) - 1
+        if index < 0:
+            return 0.0
+        start, length, rate = spells[index]
+        return before[index] + rate * min(length, moment_s - start)
 
-def _sum_within(spells: list[tuple[float, float, float]], low_s: float, high_s: float) -> float:
-    return sum(rate * max(0.0, min(start + length, high_s) - max(start, low_s)) for start, length, rate in spells)
+    # The sum is largest for some window that begins with a spell or ends with one.
+    ends = (start + length for start, length, _ in spells)
+    begins = (*starts, *(end - window_s for end in ends))
+    return max((until(begin + window_s) - until(begin) for begin in begins), default=0.0)
 
 
 def _sequence(plan: Plan) -> Iterator[tuple[Layer, int | None, int | None, What, float]]:
