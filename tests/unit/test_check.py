@@ -1,5 +1,6 @@
 """The main job: the documented call, and the two plans whose verdicts every change must keep."""
 
+import copy
 from datetime import date
 
 import farside
@@ -113,3 +114,15 @@ def test_every_finding_is_about_something_of_this_plan():
 def test_what_cannot_be_meant_is_refused():
     with pytest.raises(Refused, match="no lamp card"):
         farside.check(PLAN)
+
+
+def test_an_exposure_from_the_side_clears_no_far_side_behind_metal():
+    plan = copy.deepcopy(example_plan("deep-box"))
+    assert plan["matrix"] == "metal"
+    side = {"time_s": 60, "from": "side", "side": "buccal", "tip_distance_mm": 1}
+    for increment in plan["increments"]:
+        increment["exposures"].append({**side, "through": [{"what": "strip", "transmittance_share": 1.0}]})
+    report = farside.check(plan, example_cards(), clinic=example("clinic.yaml"))
+    far = [finding for finding in report.findings if finding.rule.id == "far-side-dose"]
+    assert far[0].finding == "stop"
+    assert report.increment_value(0, "far_dose_ratio") < 0.8

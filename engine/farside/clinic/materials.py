@@ -71,9 +71,9 @@ def chosen_row(rows: tuple[MakerRow, ...], exitance_mw_cm2: float | None) -> Mak
     """The row of a leaflet that a lamp is held to.
 
     Of the rows whose irradiance the lamp reaches, the one that asks for most; where it reaches none, or its output
-    is not known, the one that asks for least.
+    is not known, the one that asks for least. Of two with one irradiance it is the one with more seconds.
     """
     reached = [r for r in rows if exitance_mw_cm2 is not None and r.irradiance_mw_cm2 <= exitance_mw_cm2]
     if reached:
-        return max(reached, key=lambda row: row.irradiance_mw_cm2)
-    return min(rows, key=lambda row: row.irradiance_mw_cm2, default=None)
+        return max(reached, key=lambda row: (row.irradiance_mw_cm2, row.time_s))
+    return min(rows, key=lambda row: (row.irradiance_mw_cm2, -row.time_s), default=None)

@@ -1,7 +1,7 @@
 """A plan document and the cards it names to one record, with what only the whole plan can refuse."""
 
 import math
-from collections.abc import Mapping
+from collections.abc import Mapping, Sequence
 from datetime import date
 from typing import Any, Final, NoReturn
 
@@ -23,6 +23,8 @@ _NEEDED: Final = (
 )
 _LAYERS: Final = ("adhesive", "liner")
 _NOT_USED: Final = "not-used"
+# Where nothing is at the side: from above, or once the matrix is off.
+_OFF: Final = "off"
 
 
 def read_plan(document: Document, cards: Cards, clinic: Document | None = None, on: date | None = None) -> Plan:
@@ -57,7 +59,8 @@ def read_plan(document: Document, cards: Cards, clinic: Document | None = None, 
         known = ", ".join(mode.id for mode in lamp.modes)
         _refuse(merged, "mode-unknown", ("lamp", "mode"), lamp=lamp.id, mode=data["lamp"]["mode"], known=known)
     increments = tuple(
-        _increment(merged, cards, entry, ("increments", index)) for index, entry in enumerate(data["increments"])
+        _increment(merged, cards, entry, ("increments", index), data.get("matrix"))
+        for index, entry in enumerate(data["increments"])
     )
     _refuse_unfit(merged, data, increments)
     return Plan(
@@ -74,7 +77,7 @@ def read_plan(document: Document, cards: Cards, clinic: Document | None = None, 
         liner=_layer_use(merged, cards, data, "liner"),
         room=_room(merged, data.get("room", {}).get("sources")),
         increments=increments,
-        after=_exposures(merged, data.get("after", ()), ("after",)),
+        after=_exposures(merged, data.get("after", ()), ("after",), _OFF),
         fields=data,
     )
 
@@ -121,13 +124,13 @@ def _refuse_unfit(merged: Merged, data: Mapping[str, Any], increments: tuple[Inc
             _refuse(merged, "fills-past-tip", path, filled=f"{filled_mm:g}", tip=f"{tip_mm:g}")
 
 
-def _increment(merged: Merged, cards: Cards, data: Mapping[str, Any], path: Path) -> Increment:
+def _increment(merged: Merged, cards: Cards, data: Mapping[str, Any], path: Path, matrix: str | None) -> Increment:
     return Increment(
         composite=cards.composite(data["composite"], *merged.giver((*path, "composite"))),
         thickness_mm=float(data["thickness_mm"]),
         placing_s=_number(data, "placing_s"),
         dispensed_s=_number(data, "dispensed_s"),
-        exposures=_exposures(merged, data.get("exposures", ()), (*path, "exposures")),
+        exposures=_exposures(merged, data.get("exposures", ()), (*path, "exposures"), matrix),
         fields=data,
     )
 
@@ -137,7 +140,7 @@ def _layer_use(merged: Merged, cards: Cards, data: Mapping[str, Any], kind: str)
     if use is None or use == _NOT_USED:
         return None
     layer = cards.layer(kind, use["card"], *merged.giver((kind, "card")))
-    return LayerUse(layer, _exposures(merged, use.get("exposures", ()), (kind, "exposures")))
+    return LayerUse(layer, _exposures(merged, use.get("exposures", ()), (kind, "exposures"), data.get("matrix")))
 
 
 def _room(merged: Merged, sources: Any) -> tuple[RoomSource, ...] | None:
@@ -154,26 +157,39 @@ def _room(merged: Merged, sources: Any) -> tuple[RoomSource, ...] | None:
     return tuple(RoomSource(light["what"], float(light["illuminance_lx"]), light["filter"]) for light in sources)
 
 
-def _exposures(merged: Merged, entries: Any, path: Path) -> tuple[Exposure, ...]:
-    return tuple(_exposure(merged, entry, (*path, index)) for index, entry in enumerate(entries))
+def _exposures(merged: Merged, entries: Any, path: Path, matrix: str | None) -> tuple[Exposure, ...]:
+    return tuple(_exposure(merged, entry, (*path, index), matrix) for index, entry in enumerate(entries))
 
 
-def _exposure(merged: Merged, data: Mapping[str, Any], path: Path) -> Exposure:
+def _exposure(merged: Merged, data: Mapping[str, Any], path: Path, matrix: str | None) -> Exposure:
     from_side = data["from"] == "side"
     distance_mm = _number(data, "tip_distance_mm")
     if from_side and distance_mm is None:
         _refuse(merged, "side-distance", path)
-    shares = [layer.get("transmittance_share") for layer in data["through"]]
     return Exposure(
         time_s=float(data["time_s"]),
         tilt_deg=float(data["tilt_deg"]),
         aim_offset_mm=float(data["aim_offset_mm"]),
         from_side=from_side,
         tip_distance_mm=distance_mm,
-        through_share=None if None in shares else math.prod(shares),
+        through_share=_through_share(data["through"], matrix if from_side else _OFF),
         rest_before_s=_number(data, "rest_before_s"),
         fields=data,
     )
+
+
+def _through_share(layers: Sequence[Mapping[str, Any]], matrix: str | None) -> float | None:
+    """What passes all that lies before the paste; None where it is not known.
+
+    Metal at the side passes nothing. Else a side has a wall of tooth, a strip or a gum before it, so that a plan which
+    names nothing there leaves it open.
+    """
+    if matrix == "metal":
+        return 0.0
+    known = [float(layer["transmittance_share"]) for layer in layers if "transmittance_share" in layer]
+    if len(known) < len(layers) or (not layers and matrix != _OFF):
+        return None
+    return math.prod(known)
 
 
 def _number(data: Mapping[str, Any], key: str) -> float | None:

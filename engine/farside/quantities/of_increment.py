@@ -11,6 +11,7 @@ from farside.quantities.reach import BEAM_REACH, LIGHT_REACH
 from farside.quantities.subject import Subject
 from farside.trace.aim import share_lit
 from farside.trace.curves import paste_light, transmitted_share
+from farside.trace.exposed import ExposureLight
 from farside.trace.light import IncrementLight
 from farside.trace.room import working_window_of
 
@@ -50,10 +51,15 @@ def _over_need(light: IncrementLight, dose: float | None) -> float | None:
     return None if dose is None or light.needed_dose_j_cm2 is None else dose / light.needed_dose_j_cm2
 
 
+def _from_above(light: IncrementLight) -> tuple[ExposureLight, ...]:
+    """The exposures that shine down on an increment; one from a side adds to them and replaces none."""
+    return tuple(exposure for exposure in light.exposures if not exposure.exposure.from_side)
+
+
 def _strongest(light: IncrementLight) -> float | None:
-    arriving = [exposure.axis_mw_cm2 for exposure in light.exposures]
+    arriving = [exposure.axis_mw_cm2 for exposure in _from_above(light)]
     known = [value for value in arriving if value is not None]
-    return max(known, default=0.0) if len(known) == len(arriving) else None
+    return max(known) if known and len(known) == len(arriving) else None
 
 
 def _radiant_exposure(light: IncrementLight) -> float | None:
@@ -82,20 +88,20 @@ def _spectrum_match(light: IncrementLight, row: MakerRow) -> float | None:
 
 
 def _cover(light: IncrementLight) -> float | None:
-    if not light.exposures:
-        return 0.0
-    lit = zip(*(exposure.shares_across for exposure in light.exposures), strict=True)
-    return share_lit(tuple(max(shares) for shares in lit), _COVERED)
+    lit = zip(*(exposure.shares_across for exposure in _from_above(light)), strict=True)
+    widest = tuple(max(shares) for shares in lit)
+    return share_lit(widest, _COVERED) if widest else None
 
 
 def _shadow(subject: Subject) -> Value | None:
     """The share of the floor in the wall's shadow under every exposure: what no exposure's shadow leaves out."""
     increment = subject.increment
-    if increment is None or not increment.exposures:
+    exposures = () if increment is None else _from_above(increment)
+    if not exposures:
         return None
     wall_mm, width_mm = _unfilled_above_mm(subject), subject.trace.plan.width_mm
     left, right = 1.0, 1.0
-    for light in increment.exposures:
+    for light in exposures:
         shaded = min(1.0, wall_mm * math.tan(math.radians(abs(light.exposure.tilt_deg))) / width_mm)
         left = min(left, shaded if light.exposure.tilt_deg > 0 else 0.0)
         right = min(right, shaded if light.exposure.tilt_deg < 0 else 0.0)

@@ -170,12 +170,18 @@ def test_an_exposure_may_say_its_own_distance():
 
 
 def test_from_a_side_the_light_crosses_half_the_width():
-    found = increment({"increments/0/exposures": [{"time_s": 20, "from": "side", "tip_distance_mm": 1}]})
+    bare = {"what": "strip", "transmittance_share": 1.0}
+    side = {"time_s": 20, "from": "side", "tip_distance_mm": 1}
+    found = increment({"increments/0/exposures": [{**side, "through": [bare]}]})
     curve = paste_light(found.increment.composite.paste, traced().plan.mode.bands).curve
     j_cm2 = 1000 * on_axis_share(1, 8, 3) * 20 * 1e-3
     assert found.far_dose_j_cm2 == pytest.approx(j_cm2 * curve.at(2.0))
     assert found.edge_dose_j_cm2 == pytest.approx(j_cm2 * curve.at(4.0))
     assert found.dose_at_j_cm2(0.3) == found.far_dose_j_cm2
+    unsaid = increment({"increments/0/exposures": [side]})
+    assert unsaid.far_dose_j_cm2 is None, "what lies at the side is not known"
+    behind_metal = increment({"matrix": "metal", "increments/0/exposures": [{**side, "through": [bare]}]})
+    assert behind_metal.far_dose_j_cm2 == 0.0
 
 
 def test_the_dose_within_an_increment_ends_at_its_far_dose():
