@@ -15,7 +15,9 @@ _TAIL_SHARE: Final = 0.05
 
 
 def _days_since(day: date | None, subject: Subject) -> Value | None:
-    return None if day is None else float((subject.trace.plan.on - day).days)
+    """Days from a date to the plan's; None where there is none, or where it has not come yet."""
+    on = subject.trace.plan.on
+    return None if day is None or day > on else float((on - day).days)
 
 
 def _reading_age(subject: Subject) -> Value | None:

@@ -183,8 +183,8 @@ OF_PLAN: Final[tuple[Quantity, ...]] = (
         "side_after_count",
         "plan",
         "",
-        "exposures from a side once the matrix is off",
-        lambda subject: float(sum(exposure.from_side for exposure in subject.trace.plan.after)),
+        "sides exposed once the matrix is off",
+        lambda subject: float(len({e.fields.get("side") for e in subject.trace.plan.after if e.from_side})),
     ),
     Quantity(
         "unfiltered_illuminance_lx",

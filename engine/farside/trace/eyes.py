@@ -1,6 +1,7 @@
 """What a day's exposures use of the limit for blue light thrown back by the tooth."""
 
 from functools import cache
+from typing import Final
 
 from farside import shipped
 from farside.clinic.assumed import assumption
@@ -8,6 +9,8 @@ from farside.clinic.lamp import Mode
 from farside.physics.eyes.hazard import band_weight, day_limit_s, reflected_radiance_w_m2_sr
 from farside.physics.light.bands import band_nodes
 from farside.trace.light import LightTrace
+
+_WATCHING: Final = frozenset({"operator", "assistant"})
 
 
 @cache
@@ -25,8 +28,9 @@ def mode_weight(mode: Mode) -> float:
 def day_share(trace: LightTrace) -> float | None:
     """The share of a day's limit that the day's exposures use, seen without a filter unless one is known.
 
-    The day's exposures take this plan's mean seconds each, at this plan's largest irradiance. None where the count of
-    the day or an irradiance is not known, or the plan exposes nothing.
+    A filter counts where operator and assistant both wear it. The day's exposures take this plan's mean seconds each,
+    at this plan's largest irradiance. None where the count of the day or an irradiance is not known, or the plan
+    exposes nothing.
     """
     team = trace.plan.fields.get("team", {})
     count = team.get("exposures_today_count")
@@ -38,5 +42,6 @@ def day_share(trace: LightTrace) -> float | None:
     radiance = reflected_radiance_w_m2_sr(
         max(arriving), assumption("tooth-reflectance-share"), mode_weight(trace.plan.mode)
     )
-    seen = radiance * float(team.get("filter_transmittance_share", 1.0))
+    worn = _WATCHING.issubset(team.get("filters_for", ()))
+    seen = radiance * float(team.get("filter_transmittance_share", 1.0) if worn else 1.0)
     return float(count) * mean_s / day_limit_s(seen) if seen > 0.0 else 0.0

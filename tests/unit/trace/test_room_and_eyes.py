@@ -76,13 +76,15 @@ def test_the_days_seconds_are_the_mean_and_its_irradiance_the_largest():
     assert found == pytest.approx(day_share(traced({**PLAN, "team": TEAM})) * 25 / 20)
 
 
-def test_a_filter_counts_only_where_it_is_known_and_loupes_never():
+def test_a_filter_counts_only_where_it_is_known_and_worn_and_loupes_never():
     bare = day_share(traced({**PLAN, "team": TEAM}))
     assert day_share(traced({**PLAN, "team": {**TEAM, "filters_for": ["operator"]}})) == bare
     assert day_share(traced({**PLAN, "team": {**TEAM, "loupes": True}})) == bare
-    known = {**TEAM, "filter_transmittance_share": 0.001}
+    worn = {**TEAM, "filters_for": ["operator", "assistant"]}
+    known = {**worn, "filter_transmittance_share": 0.001}
     assert day_share(traced({**PLAN, "team": known})) == pytest.approx(bare / 1000)
-    assert day_share(traced({**PLAN, "team": {**TEAM, "filter_transmittance_share": 0}})) == 0
+    assert day_share(traced({**PLAN, "team": {**known, "filters_for": ["operator", "patient"]}})) == bare
+    assert day_share(traced({**PLAN, "team": {**worn, "filter_transmittance_share": 0}})) == 0
 
 
 def test_without_the_days_count_or_the_lamps_output_there_is_no_share():
