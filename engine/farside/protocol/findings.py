@@ -7,6 +7,7 @@ from typing import Any, Final
 from farside.protocol.rule import GRADES, Grade, Level, Outcome, Rule, judged
 from farside.protocol.wording import filled, of_input, placeholders, said, shown, with_unit
 from farside.quantities.quantity import NotHad
+from farside.quantities.reach import OUTSIDE
 from farside.quantities.values import SubjectValues
 
 Where = Mapping[str, str | int | None]
@@ -138,15 +139,19 @@ def _words(rule: Rule, outcome: Outcome, missing: tuple[str, ...], values: Subje
     if outcome.finding == "clear":
         return rule.title, ""
     if outcome.finding == "open" and missing:
-        reasons = (_reason(name) for name in missing)
-        return said("open-missing", missing="; ".join(reasons)), said("open-missing-do")
+        reasons = [_reason(name) for name in missing]
+        remedy = "open-beyond-do" if all(map(_is_beyond, missing)) else "open-missing-do"
+        return said("open-missing", missing="; ".join(reasons)), said(remedy)
     level = outcome.level or Level(outcome.finding, rule.open_when, rule.says, rule.do)
     return _filled(level.says, rule, values), _filled(level.do, rule, values)
 
 
 def _reason(name: str) -> str:
-    beyond = " is outside " in name
-    return said("beyond-reach", input=name) if beyond else said("input-missing", input=of_input(name))
+    return said("beyond-reach", input=name) if _is_beyond(name) else said("input-missing", input=of_input(name))
+
+
+def _is_beyond(name: str) -> bool:
+    return OUTSIDE in name
 
 
 def _filled(words: str, rule: Rule, values: SubjectValues) -> str:

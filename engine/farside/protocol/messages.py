@@ -6,12 +6,15 @@ from typing import Final
 MESSAGES: Final[Mapping[str, str]] = {
     "open-missing": "Not judged: {missing}.",
     "open-missing-do": "Enter it, and the rule answers.",
+    "open-beyond-do": (
+        "Look for a slip of the hand. Out there no figure is given, and a plan within the range is the remedy."
+    ),
     "input-missing": "{input} is missing",
     "beyond-reach": "{input}, the range over which the model was checked",
     "verdict-stop-increment": "Do not expose increment {number} yet",
     "verdict-stop": "Do not expose yet",
     "verdict-revise": "Change this plan before exposing",
-    "verdict-open": "Not judged to the end: something is missing",
+    "verdict-open": "Not judged to the end: something is missing or out of range",
     "verdict-watch": "Go on, knowing what follows",
     "verdict-clear": "Clear by these rules and these inputs",
     "where-of-plan": "the plan",
@@ -93,6 +96,9 @@ INPUTS: Final[Mapping[str, str]] = {
     "liner.may_cure_with_cover": "whether the liner may be exposed together with what covers it",
     "increment.cover": "what keeps air from its surface",
     "exposure.air": "whether air is blown on the tooth",
+    "cover_share": "an exposure from above",
+    "shadow_share": "an exposure from above",
+    "surface_irradiance_mw_cm2": "an exposure from above",
     "plan.site": "whether the tooth is anterior or posterior",
     "plan.matrix": "the matrix",
 }

@@ -8,6 +8,9 @@ from farside.trace.exposed import ExposureLight
 
 Reach = Mapping[str, tuple[float, float]]
 
+OUTSIDE: Final = " is outside "
+_UNITS: Final = {"_per_mm": "/mm", "_mw_cm2": "mW/cm²", "_mm": "mm", "_s": "s"}
+
 LIGHT_REACH: Final[Reach] = {
     "exitance_mw_cm2": (100.0, 4000.0),
     "time_s": (1.0, 120.0),
@@ -30,11 +33,21 @@ ADHESIVE_REACH: Final[Reach] = {
 def beyond(reach: Reach, subject: Subject) -> tuple[str, ...]:
     """The inputs of a subject that lie outside a reach, each with its value and range in words."""
     return tuple(
-        f"{name} {value:g} is outside {low:g} to {high:g}"
+        f"{_label(name)} {value:g}{OUTSIDE}{low:g} to {high:g}{_unit(name)}"
         for name, (low, high) in reach.items()
         for value in _INPUTS[name](subject)
         if not low <= value <= high
     )
+
+
+def _label(name: str) -> str:
+    """An input's name as words have it, without its unit."""
+    suffix = next((suffix for suffix in _UNITS if name.endswith(suffix)), "")
+    return name.removesuffix(suffix).replace("_", " ")
+
+
+def _unit(name: str) -> str:
+    return next((f" {unit}" for suffix, unit in _UNITS.items() if name.endswith(suffix)), "")
 
 
 def _exitance(subject: Subject) -> list[float]:

@@ -85,7 +85,7 @@ def test_a_clear_plan_says_how_many_checks_and_no_other():
 def test_what_is_open_says_what_is_missing():
     text = text_of(edited(example_plan("shallow-clear"), {"cavity/remaining_dentine_mm": None}))
     assert "◇ open    Not judged: the remaining dentine is missing." in text
-    assert text.splitlines()[2] == "◇ Not judged to the end: something is missing"
+    assert text.splitlines()[2] == "◇ Not judged to the end: something is missing or out of range"
 
 
 def test_assumed_optics_are_said_once_a_composite(deep_box):

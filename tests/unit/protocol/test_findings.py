@@ -97,8 +97,9 @@ def test_beyond_reach_the_reason_is_the_range():
     (found,) = findings(rule, {**PLAN, "gap_mm": 12})
     assert found.finding == "open"
     assert found.says == (
-        "Not judged: tip_distance_mm 12 is outside 0 to 10, the range over which the model was checked."
+        "Not judged: tip distance 12 is outside 0 to 10 mm, the range over which the model was checked."
     )
+    assert found.do.startswith("Look for a slip of the hand.")
 
 
 def test_a_rule_that_applies_to_nothing_is_listed():
