@@ -157,10 +157,9 @@ export function clinicOf(state: State): Clinic | null {
   return state.clinic ?? state.start?.clinic ?? null;
 }
 
-/** The cards to choose from: an opened card stands in for the example's of the same id. */
+/** The cards to choose from: an opened card stands in for the example's of its kind and id. */
 export function cardsOf(state: State): readonly Card[] {
-  const own = new Set(state.cards.map((card) => card.id));
-  return [...state.cards, ...(state.start?.cards ?? []).filter((card) => !own.has(card.id))];
+  return withHeld(state.cards, state.start?.cards ?? []);
 }
 
 export function working(state: State): boolean {
@@ -220,9 +219,18 @@ function example(state: State, name: string): State {
   return found === undefined ? state : replaced(state, found.data, words.files.fromExample);
 }
 
+/** New cards, and those held before that no new one takes the place of. */
+function withHeld(brought: readonly Card[], held: readonly Card[]): readonly Card[] {
+  const keys = new Set(brought.map(keyOf));
+  return [...brought, ...held.filter((card) => !keys.has(keyOf(card)))];
+}
+
+function keyOf({ kind, id }: Card): string {
+  return `${kind} ${id}`;
+}
+
 function openedWith(state: State, opened: Extract<Action, { is: "opened" }>): State {
-  const ids = new Set(opened.cards.map((card) => card.id));
-  const cards = [...opened.cards, ...state.cards.filter((card) => !ids.has(card.id))];
+  const cards = withHeld(opened.cards, state.cards);
   const base = { ...state, cards, clinic: opened.clinic ?? state.clinic, answered: null };
   const plan = opened.plan === null ? { ...state.plan } : opened.plan;
   const from = opened.plan === null ? state.from : words.files.fromFile;

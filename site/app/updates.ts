@@ -53,12 +53,6 @@ export async function offerUpdate(callback: (take: TakeUpdate) => void): Promise
   });
 }
 
-/** Asks the server now whether there is a newer version; the browser asks by itself at each visit. */
-export async function lookForUpdate(): Promise<void> {
-  const registration = await keepOffline();
-  await registration?.update();
-}
-
 function take(waiting: ServiceWorker): void {
   navigator.serviceWorker.addEventListener("controllerchange", () => location.reload(), { once: true });
   waiting.postMessage({ type: "SKIP_WAITING" });

@@ -111,13 +111,15 @@ function layersOf(clock: readonly ClockStep[]): readonly { label: string; start:
 }
 
 function total(seconds: number): string {
-  return words.clock.total(Math.floor(seconds / 60), Math.round(seconds % 60));
+  const whole = Math.round(seconds);
+  return words.clock.total(Math.floor(whole / 60), whole % 60);
 }
 
 /** The narrowest window against the longest placing. */
 function windowSays({ window_s: windows }: Drawing): string {
   const known = windows.map((each) => each.window_s).filter((window): window is number => window !== null);
   const placings = windows.map((each) => each.placing_s).filter((placing): placing is number => placing !== null);
-  if (known.length === 0 || placings.length === 0) return words.clock.noWindow;
+  if (known.length === 0) return words.clock.noWindow;
+  if (placings.length === 0) return words.clock.noPlacing;
   return words.clock.window(shownNumber(Math.floor(Math.min(...known))), shownNumber(Math.max(...placings)));
 }

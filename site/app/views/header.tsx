@@ -29,7 +29,8 @@ export function Header({ state }: { readonly state: State }) {
 function LampFacts({ state }: { readonly state: State }) {
   const id = effective(state.plan, clinicOf(state), ["lamp", "card"]);
   const title = cardsOf(state).find((card) => card.kind === "lamp" && card.id === id)?.title;
-  const quantities = state.answered?.report.lamp.quantities;
+  const judged = state.answered?.report.lamp;
+  const quantities = judged?.id === id ? judged?.quantities : undefined;
   const exitance = quantities?.["radiant_exitance_mw_cm2"]?.value;
   const age = quantities?.["reading_age_days"]?.value;
   return (

@@ -101,7 +101,6 @@ export const en = {
   },
   room: {
     sources: "Light in the room",
-    source: (n: number) => `Light ${n}`,
     add: "Add a light",
     remove: (n: number) => `Remove light ${n}`,
     team: "The team today",
@@ -237,7 +236,8 @@ export const en = {
       `${minutes} min ${String(seconds).padStart(2, "0")} s of light, placing and rests`,
     window: (window: string, longest: string) =>
       `Working window (lines) ${window} s; longest placing ${longest} s.`,
-    noWindow: "Working window not known: no room light entered.",
+    noWindow: "No working window: the room's light is not entered, or it is dark.",
+    noPlacing: "No placing time is entered to hold against the working window.",
     layers: { adhesive: "adhesive", liner: "liner", increment: "increment", after: "after the matrix" },
     does: { expose: "expose", place: "place", rest: "rest" },
     table: "The chair clock as a table",
