@@ -8,9 +8,9 @@ from farside.physics.light.beam import on_axis_share
 from farside.quantities.quantity import Quantity, Value
 from farside.quantities.reach import BEAM_REACH
 from farside.quantities.subject import Subject
+from farside.trace.curves import TO_J
 from farside.trace.exposed import ExposureLight
 
-_TO_J: Final = 1e-3
 _LONGEST_SUM: Final = 6
 _RESTED_S: Final = 600.0
 
@@ -73,7 +73,7 @@ def _soft_tissue(subject: Subject) -> Value | None:
         return None
     lamp = subject.trace.plan.lamp
     share = on_axis_share(float(distance_mm), lamp.tip_diameter_mm, lamp.beam.spread_exponent)
-    return exitance * share * light.exposure.time_s * _TO_J
+    return exitance * share * light.exposure.time_s * TO_J
 
 
 OF_EXPOSURE: Final[tuple[Quantity, ...]] = (

@@ -6,17 +6,16 @@ from typing import Final
 
 from farside.clinic.materials import MakerRow
 from farside.clinic.plan import Exposure
-from farside.quantities.quantity import Quantity, Value
+from farside.quantities.quantity import Quantity, Value, entered
 from farside.quantities.reach import BEAM_REACH, LIGHT_REACH
 from farside.quantities.subject import Subject
 from farside.trace.aim import share_lit
 from farside.trace.curves import paste_light, transmitted_share
-from farside.trace.exposed import ExposureLight
+from farside.trace.exposed import ExposureLight, known_sum
 from farside.trace.light import IncrementLight
 from farside.trace.room import working_window_of
 
 _COVERED: Final = 0.8
-_TO_J: Final = 1e-3
 
 _LAMP: Final = ("lamp.readings",)
 _ARRIVING: Final = (*_LAMP, "lamp.beam", "increment.through")
@@ -39,14 +38,6 @@ def _of_row(read: Callable[[IncrementLight, MakerRow], float | None]) -> Callabl
     return _of(lambda light: None if light.row is None else read(light, light.row))
 
 
-def _entered(name: str) -> Callable[[Subject], Value | None]:
-    def value(subject: Subject) -> Value | None:
-        found = subject.field(f"increment.{name}")
-        return None if found is None else float(found)
-
-    return value
-
-
 def _over_need(light: IncrementLight, dose: float | None) -> float | None:
     return None if dose is None or light.needed_dose_j_cm2 is None else dose / light.needed_dose_j_cm2
 
@@ -63,23 +54,15 @@ def _strongest(light: IncrementLight) -> float | None:
 
 
 def _radiant_exposure(light: IncrementLight) -> float | None:
-    total = 0.0
-    for exposure in light.exposures:
-        if exposure.axis_mw_cm2 is None:
-            return None
-        total += exposure.axis_mw_cm2 * exposure.exposure.time_s * _TO_J
-    return total
+    return known_sum(exposure.axis_j_cm2 for exposure in light.exposures)
 
 
 def _transmitted(light: IncrementLight) -> float | None:
-    total = 0.0
+    given = known_sum(exposure.middle_j_cm2 for exposure in light.exposures)
+    if given is None:
+        return None
     paste, nodes = light.increment.composite.paste, light.paste_light.nodes
-    for exposure in light.exposures:
-        if exposure.middle_mw_cm2 is None:
-            return None
-        share = transmitted_share(paste, nodes, light.increment.thickness_mm)
-        total += exposure.middle_mw_cm2 * exposure.exposure.time_s * _TO_J * share
-    return total
+    return given * transmitted_share(paste, nodes, light.increment.thickness_mm)
 
 
 def _spectrum_match(light: IncrementLight, row: MakerRow) -> float | None:
@@ -249,7 +232,7 @@ OF_INCREMENT: Final[tuple[Quantity, ...]] = (
         reads=_PASTE,
         reach=LIGHT_REACH,
     ),
-    Quantity("thickness_mm", "increment", "mm", "as planned, along the light", _entered("thickness_mm")),
+    Quantity("thickness_mm", "increment", "mm", "as planned, along the light", entered("increment.thickness_mm")),
     Quantity(
         "tip_distance_mm",
         "increment",
@@ -349,7 +332,7 @@ OF_INCREMENT: Final[tuple[Quantity, ...]] = (
         "increment",
         "mm",
         "depth of any part that no straight line from the tip can reach",
-        _entered("undercut_mm"),
+        entered("increment.undercut_mm"),
         reads=("increment.undercut_mm",),
     ),
     Quantity(
@@ -357,7 +340,7 @@ OF_INCREMENT: Final[tuple[Quantity, ...]] = (
         "increment",
         "°C",
         "the composite's temperature at exposure",
-        _entered("composite_temperature_c"),
+        entered("increment.composite_temperature_c"),
         reads=("increment.composite_temperature_c",),
     ),
     Quantity(

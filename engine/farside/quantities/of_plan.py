@@ -1,31 +1,22 @@
 """Quantities of the whole plan: cavity, adhesive and liner, room, eyes, what is assumed and what is beyond reach."""
 
-from collections.abc import Callable
 from typing import Final
 
 from farside.clinic.materials import chosen_row
 from farside.clinic.plan import LayerUse
 from farside.quantities.inputs import origin
-from farside.quantities.quantity import Quantity, Value
+from farside.quantities.quantity import Quantity, Value, entered
 from farside.quantities.reach import ADHESIVE_REACH, BEAM_REACH, LIGHT_REACH, beyond
 from farside.quantities.subject import Subject, subjects
 from farside.trace.clock import largest_in_window
-from farside.trace.exposed import ExposureLight
+from farside.trace.curves import TO_J
+from farside.trace.exposed import known_sum
 from farside.trace.eyes import day_share
 from farside.trace.room import unfiltered_lx, weighted_mw_cm2
 
-_TO_J: Final = 1e-3
 # Sums of entered millimetres are freed of binary dust, so that what adds up on paper adds up here.
 _DECIMALS: Final = 9
 _LAYER: Final = ("lamp.readings", "lamp.beam", "adhesive.through", "plan.adhesive", "adhesive.maker_instructions")
-
-
-def _entered(path: str) -> Callable[[Subject], Value | None]:
-    def value(subject: Subject) -> Value | None:
-        found = subject.field(path)
-        return None if found is None else float(found)
-
-    return value
 
 
 def _time_s(use: LayerUse | None) -> float | None:
@@ -47,17 +38,8 @@ def _adhesive_dose_ratio(subject: Subject) -> Value | None:
     if use is None:
         return None
     row = chosen_row(use.layer.rows, subject.trace.exitance_mw_cm2)
-    given = _radiant_exposure(lights)
-    return None if row is None or given is None else given / (row.irradiance_mw_cm2 * row.time_s * _TO_J)
-
-
-def _radiant_exposure(lights: tuple[ExposureLight, ...]) -> float | None:
-    total = 0.0
-    for light in lights:
-        if light.middle_mw_cm2 is None:
-            return None
-        total += light.middle_mw_cm2 * light.exposure.time_s * _TO_J
-    return total
+    given = known_sum(light.middle_j_cm2 for light in lights)
+    return None if row is None or given is None else given / (row.irradiance_mw_cm2 * row.time_s * TO_J)
 
 
 def _at_one_site(subject: Subject) -> Value | None:
@@ -69,7 +51,7 @@ def _at_one_site(subject: Subject) -> Value | None:
             rate = arriving[spell.layer, spell.index, spell.number]
             if rate is None:
                 return None
-            rates.append((spell.start_s, spell.length_s, rate * _TO_J))
+            rates.append((spell.start_s, spell.length_s, rate * TO_J))
     return largest_in_window(rates)
 
 
@@ -106,11 +88,11 @@ OF_PLAN: Final[tuple[Quantity, ...]] = (
         "plan",
         "mm",
         "between cavity floor and pulp, as entered",
-        _entered("plan.cavity.remaining_dentine_mm"),
+        entered("plan.cavity.remaining_dentine_mm"),
         reads=("plan.cavity.remaining_dentine_mm",),
     ),
-    Quantity("cavity_depth_mm", "plan", "mm", "as entered", _entered("plan.cavity.depth_mm")),
-    Quantity("gap_mm", "plan", "mm", "tip to the cavity's opening, as entered", _entered("plan.gap_mm")),
+    Quantity("cavity_depth_mm", "plan", "mm", "as entered", entered("plan.cavity.depth_mm")),
+    Quantity("gap_mm", "plan", "mm", "tip to the cavity's opening, as entered", entered("plan.gap_mm")),
     Quantity(
         "fill_gap_mm",
         "plan",

@@ -72,6 +72,16 @@ class NotHad:
     beyond: tuple[str, ...]
 
 
+def entered(path: str) -> Callable[[Subject], Value | None]:
+    """A reader of a number as it was entered, by its field's dotted path."""
+
+    def value(subject: Subject) -> Value | None:
+        number = subject.field(path)
+        return None if number is None else float(number)
+
+    return value
+
+
 def found(quantity: Quantity, subject: Subject) -> Found | NotHad:
     """A quantity's value for a subject of its own sort."""
     outside = () if quantity.reach is None else beyond(quantity.reach, subject)

@@ -19,7 +19,7 @@ STEP_MM: Final = 0.05
 DEEPEST_MM: Final = 20.0
 VIOLET_BELOW_NM: Final = 430.0
 
-_TO_J: Final = 1e-3
+TO_J: Final = 1e-3
 # What a strong absorber leaves at 20 mm can be less than a double holds; its logarithm must still stand in the table.
 _FAINTEST: Final = sys.float_info.min
 # An initiator that peaks below this meets every lamp on the steep flank of its absorption: the acylphosphine oxides.
@@ -61,7 +61,7 @@ class PasteLight:
 
     def dose_j_cm2(self, irradiance_mw_cm2: float, time_s: float, depth_mm: float) -> float:
         """Dose at a depth for an irradiance over some seconds. [J/cm²]"""
-        return 0.0 if self.curve is None else irradiance_mw_cm2 * time_s * _TO_J * self.curve.at(depth_mm)
+        return 0.0 if self.curve is None else irradiance_mw_cm2 * time_s * TO_J * self.curve.at(depth_mm)
 
     def violet_share_at(self, depth_mm: float) -> float | None:
         """Share of the dose at a depth that comes from the violet; None where there is no dose. [-]"""

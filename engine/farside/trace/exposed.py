@@ -1,5 +1,6 @@
 """What one exposure does: irradiance on the surface it is aimed at, dose at the far side and at the walls."""
 
+from collections.abc import Iterable
 from dataclasses import dataclass
 from typing import Final
 
@@ -7,9 +8,19 @@ from farside.clinic.plan import Exposure, Plan
 from farside.physics.light.beam import surface_share
 from farside.trace.aim import share_lit, shares_across, wall_share
 from farside.trace.clock import Layer
-from farside.trace.curves import PasteLight
+from farside.trace.curves import TO_J, PasteLight
 
 _HALF: Final = 0.5
+
+
+def known_sum(parts: Iterable[float | None]) -> float | None:
+    """The sum of some parts; None where one of them is not known."""
+    total = 0.0
+    for part in parts:
+        if part is None:
+            return None
+        total += part
+    return total
 
 
 @dataclass(frozen=True, slots=True)
@@ -30,6 +41,16 @@ class ExposureLight:
     middle_mw_cm2: float | None
     far_dose_j_cm2: float | None
     edge_doses_j_cm2: tuple[float, float] | None
+
+    @property
+    def axis_j_cm2(self) -> float | None:
+        """Radiant exposure on the axis at the surface; None where the irradiance is not known."""
+        return None if self.axis_mw_cm2 is None else self.axis_mw_cm2 * self.exposure.time_s * TO_J
+
+    @property
+    def middle_j_cm2(self) -> float | None:
+        """Radiant exposure at the middle of the cavity's width; None where the irradiance is not known."""
+        return None if self.middle_mw_cm2 is None else self.middle_mw_cm2 * self.exposure.time_s * TO_J
 
     @property
     def footprint_share(self) -> float:

@@ -1,6 +1,5 @@
 """The light of a whole plan: what leaves the lamp, arrives on each surface and reaches each far side."""
 
-from collections.abc import Sequence
 from dataclasses import dataclass
 
 from farside.clinic.assumed import value
@@ -9,7 +8,7 @@ from farside.clinic.materials import MakerRow, chosen_row
 from farside.clinic.plan import Increment, LayerUse, Plan
 from farside.trace.clock import Layer, Spell, chair_clock
 from farside.trace.curves import PasteLight, paste_light
-from farside.trace.exposed import Aimed, ExposureLight
+from farside.trace.exposed import Aimed, ExposureLight, known_sum
 
 
 @dataclass(frozen=True, slots=True)
@@ -28,7 +27,7 @@ class IncrementLight:
     @property
     def far_dose_j_cm2(self) -> float | None:
         """Dose at the middle of the far side; None where an exposure's cannot be had."""
-        return _sum([light.far_dose_j_cm2 for light in self.exposures])
+        return known_sum(light.far_dose_j_cm2 for light in self.exposures)
 
     @property
     def edge_dose_j_cm2(self) -> float | None:
@@ -40,7 +39,7 @@ class IncrementLight:
 
     def dose_at_j_cm2(self, depth_mm: float) -> float | None:
         """Dose at the middle of the width, at a depth below the increment's lit face."""
-        return _sum([self._dose_of(light, depth_mm) for light in self.exposures])
+        return known_sum(self._dose_of(light, depth_mm) for light in self.exposures)
 
     def _dose_of(self, light: ExposureLight, depth_mm: float) -> float | None:
         if light.exposure.from_side or light.middle_mw_cm2 is None:
@@ -128,8 +127,3 @@ def _on_floor(plan: Plan, exitance: float | None, layer: Layer, use: LayerUse | 
     floor = Aimed(plan, exitance, -1)
     exposures = () if use is None else use.exposures
     return tuple(floor.lit(layer, number, exposure) for number, exposure in enumerate(exposures, start=1))
-
-
-def _sum(parts: Sequence[float | None]) -> float | None:
-    known = [part for part in parts if part is not None]
-    return None if len(known) < len(parts) else sum(known)
