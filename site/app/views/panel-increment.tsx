@@ -7,8 +7,8 @@ import { words } from "../words/index";
 import { Choice } from "./choice";
 import { Exposures } from "./exposures";
 import { FieldView, type Part } from "./field";
-import { Icon } from "./icon";
 import { MarkShape } from "./mark";
+import { SignButton } from "./sign-button";
 
 export function IncrementPanel({ state, send }: Part) {
   const { selected, plan } = state;
@@ -65,26 +65,18 @@ function Order({ state, send }: Part) {
         })}
       </div>
       <div class="moves" role="group" aria-label={words.increment.title(selected + 1, count)}>
-        <button
-          type="button"
-          class="sign"
-          aria-label={words.increment.down}
-          title={words.increment.down}
+        <SignButton
+          name={words.increment.down}
+          sign="down"
           disabled={selected === 0}
           onClick={() => send({ is: "move", by: -1 })}
-        >
-          <Icon name="down" />
-        </button>
-        <button
-          type="button"
-          class="sign"
-          aria-label={words.increment.up}
-          title={words.increment.up}
+        />
+        <SignButton
+          name={words.increment.up}
+          sign="up"
           disabled={selected === count - 1}
           onClick={() => send({ is: "move", by: 1 })}
-        >
-          <Icon name="up" />
-        </button>
+        />
         <button type="button" disabled={count >= MOST_INCREMENTS} onClick={() => send({ is: "add", copy: false })}>
           {words.increment.add}
         </button>

@@ -2,7 +2,7 @@
 import { look } from "../look";
 import { words } from "../words/index";
 import type { Part } from "./field";
-import { Icon } from "./icon";
+import { SignButton } from "./sign-button";
 
 export function Tools({ state, send, offline }: Part & { readonly offline: boolean }) {
   return (
@@ -10,33 +10,23 @@ export function Tools({ state, send, offline }: Part & { readonly offline: boole
       <button type="button" class="main" onClick={() => send({ is: "files", shown: true })}>
         {words.tools.files}
       </button>
-      <button
-        type="button"
-        class="sign"
-        aria-label={words.tools.undo}
-        title={words.tools.undo}
+      <SignButton
+        name={words.tools.undo}
+        sign="undo"
         disabled={state.past.length === 0}
         onClick={() => send({ is: "undo" })}
-      >
-        <Icon name="undo" />
-      </button>
-      <button
-        type="button"
-        class="sign"
-        aria-label={words.tools.redo}
-        title={words.tools.redo}
+      />
+      <SignButton
+        name={words.tools.redo}
+        sign="redo"
         disabled={state.future.length === 0}
         onClick={() => send({ is: "redo" })}
-      >
-        <Icon name="redo" />
-      </button>
+      />
       <span class="gap">{offline && <span class="offline">{words.update.offline}</span>}</span>
       <a class="button" href="how-to-use/">
         {words.tools.help}
       </a>
-      <button type="button" class="sign" aria-label={words.tools.look} title={words.tools.look} onClick={look}>
-        <Icon name="look" />
-      </button>
+      <SignButton name={words.tools.look} sign="look" onClick={look} />
     </div>
   );
 }
